@@ -49,7 +49,8 @@ export function createApp({ config, database, mailer, log, clientDir }: AppParts
         }),
         res: (response: { statusCode: number }) => ({ status: response.statusCode }),
       },
-      customLogLevel: (_request, response, error) => (error || response.statusCode >= 500 ? 'error' : response.statusCode >= 400 ? 'warn' : 'debug'),
+      customLogLevel: (_request, response, error) =>
+        error || response.statusCode >= 500 ? 'error' : response.statusCode >= 400 ? 'warn' : 'debug',
     }),
   );
   app.use(
@@ -79,15 +80,30 @@ export function createApp({ config, database, mailer, log, clientDir }: AppParts
   app.use('/api', sameOrigin);
   app.all('/api/auth/*splat', toNodeHandler(auth));
   app.use('/api', express.json({ limit: '20mb' }), readSession(auth));
-  for (const { method, path, handlers } of allRoutes({ trial: config.trial, publicUrl: config.publicUrl, mailer }))
+  for (const { method, path, handlers } of allRoutes({
+    trial: config.trial,
+    publicUrl: config.publicUrl,
+    mailer,
+  }))
     app[method](path, ...handlers);
   app.use('/api', apiNotFound);
 
   if (clientDir !== undefined && existsSync(clientDir)) {
-    app.use('/assets', express.static(join(clientDir, 'assets'), { immutable: true, maxAge: YEAR_SECONDS * 1000, fallthrough: false }));
+    app.use(
+      '/assets',
+      express.static(join(clientDir, 'assets'), {
+        immutable: true,
+        maxAge: YEAR_SECONDS * 1000,
+        fallthrough: false,
+      }),
+    );
     app.use(express.static(clientDir, { index: false, maxAge: 0 }));
-    app.get('/*splat', (_request, response) => response.sendFile(join(clientDir, 'index.html'), { headers: { 'Cache-Control': 'no-cache' } }));
-    app.get('/', (_request, response) => response.sendFile(join(clientDir, 'index.html'), { headers: { 'Cache-Control': 'no-cache' } }));
+    app.get('/*splat', (_request, response) =>
+      response.sendFile(join(clientDir, 'index.html'), { headers: { 'Cache-Control': 'no-cache' } }),
+    );
+    app.get('/', (_request, response) =>
+      response.sendFile(join(clientDir, 'index.html'), { headers: { 'Cache-Control': 'no-cache' } }),
+    );
   }
   app.use(answerErrors);
   return app;

@@ -17,9 +17,13 @@ function greet(config: Config, port: number, demo: boolean): string {
   const address = config.trial ? `http://localhost:${port}` : config.publicUrl;
   const lines = [`Barwright serves ${address}`];
   if (config.trial)
-    lines.push('Local trial: no production settings are given, so data stays in this folder and mail in a local mailbox that a manager can read.');
+    lines.push(
+      'Local trial: no production settings are given, so data stays in this folder and mail in a local mailbox that a manager can read.',
+    );
   if (demo) {
-    lines.push(`Demo shop. Sign in on the first page with one click, or with the password "${DEMO_PASSWORD}" as:`);
+    lines.push(
+      `Demo shop. Sign in on the first page with one click, or with the password "${DEMO_PASSWORD}" as:`,
+    );
     for (const { role, email } of DEMO_PEOPLE) lines.push(`  ${role.padEnd(10)} ${email}`);
   }
   return lines.join('\n');
@@ -47,7 +51,9 @@ async function main(): Promise<void> {
 
   const server = app.listen(config.port, (error?: Error) => {
     if (error) {
-      process.stderr.write(`Port ${config.port} cannot be used: ${error.message}. Set PORT to another one.\n`);
+      process.stderr.write(
+        `Port ${config.port} cannot be used: ${error.message}. Set PORT to another one.\n`,
+      );
       process.exit(1);
     }
     const address = server.address();
@@ -79,7 +85,12 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  const words = error instanceof ConfigError ? error.message : error instanceof Error ? (error.stack ?? error.message) : String(error);
+  const words =
+    error instanceof ConfigError
+      ? error.message
+      : error instanceof Error
+        ? (error.stack ?? error.message)
+        : String(error);
   process.stderr.write(`${words}\n`);
   process.exit(1);
 });

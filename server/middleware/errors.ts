@@ -13,7 +13,8 @@ function asShopError(error: unknown): ShopError | null {
       ? new ShopError('file-too-large', 'The file is over 20 MB. Split the list and upload the parts.')
       : new ShopError('bad-input', 'The upload could not be read. Send one file in the field "file".');
   if (error instanceof Error && 'type' in error) {
-    if (error.type === 'entity.too.large') return new ShopError('file-too-large', 'That is too much to send at once.');
+    if (error.type === 'entity.too.large')
+      return new ShopError('file-too-large', 'That is too much to send at once.');
     if (error.type === 'entity.parse.failed') return new ShopError('bad-input', 'What was sent is not JSON.');
   }
   return null;
@@ -28,7 +29,11 @@ export const answerErrors: ErrorRequestHandler = (error: unknown, request, respo
   if (response.headersSent) return next(error);
   const known = asShopError(error);
   if (!known) request.log.error({ err: error }, 'a request failed');
-  const { code, message, issues } = known ?? new ShopError('server-fault', 'Something went wrong on the server. Nothing was changed. Try again.');
-  const body: ErrorBody = { error: { code, message, requestId: requestIdOf(request), ...(issues ? { issues } : {}) } };
+  const { code, message, issues } =
+    known ??
+    new ShopError('server-fault', 'Something went wrong on the server. Nothing was changed. Try again.');
+  const body: ErrorBody = {
+    error: { code, message, requestId: requestIdOf(request), ...(issues ? { issues } : {}) },
+  };
   response.status(ERROR_STATUS[code]).json(body);
 };

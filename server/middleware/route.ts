@@ -58,7 +58,8 @@ function collect<T>(schema: z.ZodType<T> | undefined, value: unknown, issues: Er
   if (!schema) return undefined as T;
   const result = schema.safeParse(value);
   if (result.success) return result.data;
-  for (const issue of result.error.issues) issues.push({ path: issue.path.map(String).join('.'), message: issue.message });
+  for (const issue of result.error.issues)
+    issues.push({ path: issue.path.map(String).join('.'), message: issue.message });
   return undefined as T;
 }
 
@@ -72,7 +73,8 @@ export function route<L extends Allow, P = undefined, Q = undefined, B = undefin
     const params = collect(spec.params, request.params, issues);
     const query = collect(spec.query, request.query, issues);
     const body = collect(spec.body, request.body as unknown, issues);
-    if (issues.length > 0) throw new ShopError('bad-input', 'Some of what was sent cannot be used; see each field.', issues);
+    if (issues.length > 0)
+      throw new ShopError('bad-input', 'Some of what was sent cannot be used; see each field.', issues);
     const actor = actorOf(response) as Input<P, Q, B, L>['actor'];
     const answer = await work({ params, query, body, actor, request, response });
     if (response.headersSent) return;

@@ -25,6 +25,12 @@ export const sameOrigin: RequestHandler = (request, _response, next) => {
   if (SAFE.has(request.method)) return next();
   const site = request.get('sec-fetch-site');
   const origin = request.get('origin');
-  const foreign = (site !== undefined && site !== 'same-origin' && site !== 'none') || (origin !== undefined && new URL(origin).host !== request.get('host'));
-  return next(foreign ? new ShopError('not-allowed', 'This request came from another site and was refused.') : undefined);
+  const foreign =
+    (site !== undefined && site !== 'same-origin' && site !== 'none') ||
+    (origin !== undefined && new URL(origin).host !== request.get('host'));
+  return next(
+    foreign
+      ? new ShopError('not-allowed', 'This request came from another site and was refused.')
+      : undefined,
+  );
 };

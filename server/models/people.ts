@@ -1,4 +1,10 @@
-import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+  Model,
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  type Sequelize,
+} from 'sequelize';
 import { optionalText, rowId, text, version, whole } from '#server/models/columns.ts';
 import type { Role } from '#shared/permissions.ts';
 
@@ -90,9 +96,20 @@ export function initPeople(sequelize: Sequelize): void {
     },
     { ...options, tableName: 'shop' },
   );
-  Mail.init({ id: rowId(), sender: text(), recipient: text(), subject: text(), text: text(), at: text() }, { ...options, tableName: 'mails' });
+  Mail.init(
+    { id: rowId(), sender: text(), recipient: text(), subject: text(), text: text(), at: text() },
+    { ...options, tableName: 'mails' },
+  );
   AuditEntry.init(
-    { id: rowId(), at: text(), actorId: optionalText(), who: text(), action: text(), subject: text(), detail: text() },
+    {
+      id: rowId(),
+      at: text(),
+      actorId: optionalText(),
+      who: text(),
+      action: text(),
+      subject: text(),
+      detail: text(),
+    },
     { ...options, tableName: 'audit_entries' },
   );
 }

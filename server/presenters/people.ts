@@ -4,12 +4,28 @@ import type { MailSummary, MailView, Person, Shop } from '#shared/schemas/people
 import type { AuditList } from '#shared/schemas/people.ts';
 
 export function presentPerson({ person, state }: { person: PersonRow; state: Person['state'] }): Person {
-  return { id: person.id, name: person.name, email: person.email, role: person.role, state, createdAt: person.createdAt };
+  return {
+    id: person.id,
+    name: person.name,
+    email: person.email,
+    role: person.role,
+    state,
+    createdAt: person.createdAt,
+  };
 }
 
 export function presentShop(shop: ShopRow): Shop {
   const { name, units, inchDenominator, currency, paper, handlingMassMg, scrapMinorPerTonne, version } = shop;
-  return { name, units, inchDenominator, currency, paper, handlingMassMg, scrapMinorPerTonne, version: version ?? 1 };
+  return {
+    name,
+    units,
+    inchDenominator,
+    currency,
+    paper,
+    handlingMassMg,
+    scrapMinorPerTonne,
+    version: version ?? 1,
+  };
 }
 
 export function presentMail(mail: Mail): MailSummary {
@@ -21,5 +37,12 @@ export function presentMailText(mail: Mail): MailView {
 }
 
 export function presentAudit(entry: AuditEntry): z.infer<typeof AuditList>['entries'][number] {
-  return { id: entry.id, at: entry.at, who: entry.who, action: entry.action, subject: entry.subject, detail: entry.detail };
+  return {
+    id: entry.id,
+    at: entry.at,
+    who: entry.who,
+    action: entry.action,
+    subject: entry.subject,
+    detail: entry.detail,
+  };
 }

@@ -7,7 +7,11 @@ ensureInstalled();
 const bin = (name) => join(root, 'node_modules/.bin', name);
 const apiPort = process.env.PORT ?? '4310';
 const children = [
-  spawn(bin('tsx'), ['watch', 'server/main.ts'], { cwd: root, stdio: 'inherit', env: { ...process.env, PORT: apiPort } }),
+  spawn(bin('tsx'), ['watch', 'server/main.ts'], {
+    cwd: root,
+    stdio: 'inherit',
+    env: { ...process.env, PORT: apiPort },
+  }),
   spawn(bin('vite'), ['--port', process.env.DEV_PORT ?? '5173'], {
     cwd: root,
     stdio: 'inherit',

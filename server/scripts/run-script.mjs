@@ -5,5 +5,7 @@ import { ensureInstalled, root } from './steps.mjs';
 
 const [script, ...args] = process.argv.slice(2);
 ensureInstalled();
-const result = spawnSync(process.execPath, ['--import', 'tsx', join(root, script), ...args], { stdio: 'inherit' });
+const result = spawnSync(process.execPath, ['--import', 'tsx', join(root, script), ...args], {
+  stdio: 'inherit',
+});
 process.exit(result.status ?? 1);

@@ -41,7 +41,11 @@ function stampedWith(file, fingerprint) {
 /** Installs exactly what the lock file names, once for each lock file and Node version. */
 export function ensureInstalled() {
   const stamp = join(root, 'node_modules', '.installed-from');
-  const fingerprint = fingerprintOf([readFileSync(join(root, 'package-lock.json')), process.version, process.platform]);
+  const fingerprint = fingerprintOf([
+    readFileSync(join(root, 'package-lock.json')),
+    process.version,
+    process.platform,
+  ]);
   if (stampedWith(stamp, fingerprint)) return;
   console.error('Installing packages from the lock file. The first time takes a few minutes.');
   // What npm says goes to standard error, so that a command's own output stays clean.
@@ -54,7 +58,9 @@ export function ensureInstalled() {
 }
 
 function* filesBelow(folder) {
-  for (const entry of readdirSync(folder, { withFileTypes: true }).sort((a, b) => (a.name < b.name ? -1 : 1))) {
+  for (const entry of readdirSync(folder, { withFileTypes: true }).sort((a, b) =>
+    a.name < b.name ? -1 : 1,
+  )) {
     const path = join(folder, entry.name);
     if (entry.isDirectory()) yield* filesBelow(path);
     else if (!/\.test\.tsx?$/.test(entry.name)) yield path;
@@ -66,13 +72,16 @@ export function ensureBuilt() {
   const sources = ['src', 'server', 'shared', 'workers', 'fixtures/demo'].flatMap((folder) => [
     ...filesBelow(join(root, folder)),
   ]);
-  sources.push(...['index.html', 'vite.config.ts', 'tailwind.config.ts', 'package-lock.json'].map((f) => join(root, f)));
+  sources.push(
+    ...['index.html', 'vite.config.ts', 'tailwind.config.ts', 'package-lock.json'].map((f) => join(root, f)),
+  );
   const fingerprint = fingerprintOf(sources.flatMap((path) => [path.slice(root.length), readFileSync(path)]));
   const stamp = join(root, 'dist', '.built-from');
   if (stampedWith(stamp, fingerprint)) return;
   console.error('Building client and server.');
   const code =
-    runTool('vite', ['build', '--logLevel', 'warn']) || runTool('vite', ['build', '--ssr', '--logLevel', 'warn']);
+    runTool('vite', ['build', '--logLevel', 'warn']) ||
+    runTool('vite', ['build', '--ssr', '--logLevel', 'warn']);
   if (code !== 0) {
     console.error('The build failed; see above. Nothing was started.');
     process.exit(code);
@@ -89,7 +98,9 @@ export function ensureChromium() {
   console.error(`No browser at ${chromiumPath}: installing Debian's chromium.`);
   const code = run('apt-get', ['update', '-q']) || run('apt-get', ['install', '-y', '-q', 'chromium']);
   if (code !== 0 || !existsSync(chromiumPath)) {
-    console.error('Chromium could not be installed. Install it, or set CHROMIUM to the path of one, and run again.');
+    console.error(
+      'Chromium could not be installed. Install it, or set CHROMIUM to the path of one, and run again.',
+    );
     process.exit(1);
   }
 }

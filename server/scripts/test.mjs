@@ -14,7 +14,9 @@ function check(name, work) {
   const started = Date.now();
   console.log(`\n== ${name}`);
   const code = work();
-  console.log(`== ${name}: ${code === 0 ? 'good' : 'FAILED'}, ${((Date.now() - started) / 1000).toFixed(0)} s`);
+  console.log(
+    `== ${name}: ${code === 0 ? 'good' : 'FAILED'}, ${((Date.now() - started) / 1000).toFixed(0)} s`,
+  );
   return code;
 }
 
@@ -48,5 +50,7 @@ rmSync(reports, { recursive: true, force: true });
 
 const failures = Math.max(count.failed, failed.length);
 if (failed.length > 0) console.log(`\nFailed: ${failed.join(', ')}.`);
-console.log(`\n${count.passed} passed, ${failures} failed${count.skipped > 0 ? `, ${count.skipped} skipped` : ''}`);
+console.log(
+  `\n${count.passed} passed, ${failures} failed${count.skipped > 0 ? `, ${count.skipped} skipped` : ''}`,
+);
 process.exit(failures > 0 || count.passed === 0 ? 1 : 0);

@@ -3,7 +3,12 @@ import { AuditEntry } from '#server/models/index.ts';
 import type { Actor } from '#server/middleware/route.ts';
 
 /** Writes who did what to which thing, inside the running transaction: no write without its entry. */
-export async function record(actor: Pick<Actor, 'id' | 'name'> | null, action: string, subject: string, detail: object): Promise<void> {
+export async function record(
+  actor: Pick<Actor, 'id' | 'name'> | null,
+  action: string,
+  subject: string,
+  detail: object,
+): Promise<void> {
   await AuditEntry.create({
     at: new Date().toISOString(),
     actorId: actor?.id ?? null,

@@ -13,7 +13,10 @@ export function createMailer(smtpUrl: string, from: string, log: Logger): Mailer
         await transport.sendMail({ from, to: letter.to, subject: letter.subject, text: letter.text });
         return true;
       } catch (error) {
-        log.error({ error: error instanceof Error ? error.message : String(error), subject: letter.subject }, 'a letter could not be sent');
+        log.error(
+          { error: error instanceof Error ? error.message : String(error), subject: letter.subject },
+          'a letter could not be sent',
+        );
         return false;
       }
     },

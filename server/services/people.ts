@@ -4,7 +4,12 @@ import { invitationMail } from '#server/emails/invitation.ts';
 import { ShopError } from '#server/errors.ts';
 import type { Actor } from '#server/middleware/route.ts';
 import { Invitation, Person, ShopRow } from '#server/models/index.ts';
-import { endSessions, passwordHash, personsWithPassword, setPassword } from '#server/services/auth/passwords.ts';
+import {
+  endSessions,
+  passwordHash,
+  personsWithPassword,
+  setPassword,
+} from '#server/services/auth/passwords.ts';
 import { record } from '#server/services/audit.ts';
 import type { Mailer } from '#server/services/mailer.ts';
 import type { Role } from '#shared/permissions.ts';
@@ -16,7 +21,12 @@ const hashOf = (token: string) => createHash('sha256').update(token).digest('hex
 export type PersonWithState = { person: Person; state: 'active' | 'invited' | 'closed' };
 
 /** Makes a person's row inside the running write. Without a password they can only come in by a link. */
-export async function makePerson(details: { name: string; email: string; role: Role; hash?: string }): Promise<Person> {
+export async function makePerson(details: {
+  name: string;
+  email: string;
+  role: Role;
+  hash?: string;
+}): Promise<Person> {
   const now = new Date().toISOString();
   const person = await Person.create({
     id: randomUUID(),
@@ -37,7 +47,10 @@ function stateOf(person: Person, withPassword: ReadonlySet<string>): PersonWithS
 }
 
 export async function listPeople(): Promise<PersonWithState[]> {
-  const [people, withPassword] = await Promise.all([Person.findAll({ order: [['name', 'ASC']] }), personsWithPassword()]);
+  const [people, withPassword] = await Promise.all([
+    Person.findAll({ order: [['name', 'ASC']] }),
+    personsWithPassword(),
+  ]);
   return people.map((person) => ({ person, state: stateOf(person, withPassword) }));
 }
 
@@ -58,7 +71,14 @@ async function mailLink(person: Person, token: string, actor: Actor, { mailer, p
   const link = `${publicUrl}/join/${token}`;
   const shop = await ShopRow.findByPk(1);
   const mailed = await mailer.send(
-    invitationMail({ to: person.email, name: person.name, shopName: shop?.name ?? 'the shop', inviter: actor.name, link, days: LINK_DAYS }),
+    invitationMail({
+      to: person.email,
+      name: person.name,
+      shopName: shop?.name ?? 'the shop',
+      inviter: actor.name,
+      link,
+      days: LINK_DAYS,
+    }),
   );
   return { person, link, mailed };
 }
@@ -85,7 +105,8 @@ export async function findPerson(personId: string): Promise<Person> {
 export async function renewLink(personId: string, actor: Actor, context: LinkContext) {
   const { person, token } = await write(async () => {
     const found = await findPerson(personId);
-    if (found.closed === 1) throw new ShopError('wrong-state', `${found.name} is closed. Open the person again first.`);
+    if (found.closed === 1)
+      throw new ShopError('wrong-state', `${found.name} is closed. Open the person again first.`);
     await record(actor, 'person:link', `person ${found.name}`, {});
     return { person: found, token: await newLink(found.id) };
   });
@@ -93,15 +114,24 @@ export async function renewLink(personId: string, actor: Actor, context: LinkCon
 }
 
 /** Changes name, role or access. The shop always keeps one active manager. */
-export async function changePerson(personId: string, patch: PersonPatch, actor: Actor): Promise<PersonWithState> {
+export async function changePerson(
+  personId: string,
+  patch: PersonPatch,
+  actor: Actor,
+): Promise<PersonWithState> {
   return write(async () => {
     const person = await findPerson(personId);
     const withPassword = await personsWithPassword();
-    const losesManager = person.role === 'manager' && ((patch.role !== undefined && patch.role !== 'manager') || patch.active === false);
+    const losesManager =
+      person.role === 'manager' &&
+      ((patch.role !== undefined && patch.role !== 'manager') || patch.active === false);
     if (losesManager) {
       const others = await Person.findAll({ where: { role: 'manager', closed: 0 } });
       if (!others.some((other) => other.id !== person.id && withPassword.has(other.id)))
-        throw new ShopError('wrong-state', `${person.name} is the only manager. Make somebody else a manager first.`);
+        throw new ShopError(
+          'wrong-state',
+          `${person.name} is the only manager. Make somebody else a manager first.`,
+        );
     }
     const before = { name: person.name, role: person.role, closed: person.closed };
     await person.update({
@@ -117,7 +147,9 @@ export async function changePerson(personId: string, patch: PersonPatch, actor: 
 }
 
 /** The open invitation behind a token. Throws not-found with words for used, replaced and expired links alike. */
-export async function findInvitation(token: string): Promise<{ invitation: Invitation; person: Person; shopName: string }> {
+export async function findInvitation(
+  token: string,
+): Promise<{ invitation: Invitation; person: Person; shopName: string }> {
   const invitation = await Invitation.findOne({ where: { tokenHash: hashOf(token), usedAt: null } });
   const person = invitation ? await Person.findByPk(invitation.personId) : null;
   if (!invitation || !person || person.closed === 1 || invitation.expiresAt <= new Date().toISOString())

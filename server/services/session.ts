@@ -12,7 +12,9 @@ export async function describeSession(actor: Actor | null, trial: boolean): Prom
   return {
     needsSetUp: shop === null,
     trial,
-    demoSignIns: demo ? DEMO_PEOPLE.map(({ role, name, email }) => ({ role, name, email, password: DEMO_PASSWORD })) : [],
+    demoSignIns: demo
+      ? DEMO_PEOPLE.map(({ role, name, email }) => ({ role, name, email, password: DEMO_PASSWORD }))
+      : [],
     shop: shop ? presentShop(shop) : null,
     person: actor,
     can: actor ? canOf(actor.role) : {},

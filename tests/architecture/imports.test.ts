@@ -40,18 +40,53 @@ type Rule = {
 };
 
 const RULES: readonly Rule[] = [
-  { about: 'the domain knows only itself', from: /^shared\/domain\//, may: /^shared\/domain\//, packages: /^(fraction\.js|papaparse)$/ },
-  { about: 'schemas know the domain and zod', from: /^shared\/schemas\//, may: /^shared\//, packages: /^zod$/ },
-  { about: 'the solver core knows the domain', from: /^workers\/solver\/core\//, may: /^(shared\/domain|workers\/solver)\//, packages: /^highs$/ },
+  {
+    about: 'the domain knows only itself',
+    from: /^shared\/domain\//,
+    may: /^shared\/domain\//,
+    packages: /^(fraction\.js|papaparse)$/,
+  },
+  {
+    about: 'schemas know the domain and zod',
+    from: /^shared\/schemas\//,
+    may: /^shared\//,
+    packages: /^zod$/,
+  },
+  {
+    about: 'the solver core knows the domain',
+    from: /^workers\/solver\/core\//,
+    may: /^(shared\/domain|workers\/solver)\//,
+    packages: /^highs$/,
+  },
   { about: 'workers never reach server or pages', from: /^workers\//, may: /^(shared|workers)\// },
-  { about: 'components know no product', from: /^src\/components\//, may: /^(src\/components|shared\/domain)\// },
+  {
+    about: 'components know no product',
+    from: /^src\/components\//,
+    may: /^(src\/components|shared\/domain)\//,
+  },
   { about: 'lib is below the features', from: /^src\/lib\//, may: /^(src\/lib|shared|workers)\// },
   { about: 'nothing under src imports server', from: /^src\//, may: /^(src|shared|workers)\// },
   { about: 'nothing under server imports src', from: /^server\//, may: /^(server|shared|workers)\// },
-  { about: 'policies are pure', from: /^server\/policies\//, may: /^(server\/policies\/|server\/errors|shared\/)/ },
-  { about: 'presenters are pure', from: /^server\/presenters\//, may: /^(server\/presenters|server\/policies|shared)\// },
-  { about: 'routes go through services', from: /^server\/routes\//, may: /^(server\/(routes|middleware|policies|services|presenters)\/|server\/(errors|config)|shared\/)/ },
-  { about: 'services never see a request', from: /^server\/services\//, may: /^(server\/(services|models|emails|documents|policies)\/|server\/(database|errors|config|log)|shared\/|workers\/)/ },
+  {
+    about: 'policies are pure',
+    from: /^server\/policies\//,
+    may: /^(server\/policies\/|server\/errors|shared\/)/,
+  },
+  {
+    about: 'presenters are pure',
+    from: /^server\/presenters\//,
+    may: /^(server\/presenters|server\/policies|shared)\//,
+  },
+  {
+    about: 'routes go through services',
+    from: /^server\/routes\//,
+    may: /^(server\/(routes|middleware|policies|services|presenters)\/|server\/(errors|config)|shared\/)/,
+  },
+  {
+    about: 'services never see a request',
+    from: /^server\/services\//,
+    may: /^(server\/(services|models|emails|documents|policies)\/|server\/(database|errors|config|log)|shared\/|workers\/)/,
+  },
 ];
 
 describe('import rules', () => {
@@ -67,7 +102,9 @@ describe('import rules', () => {
       .flatMap((file) =>
         importsOf(file)
           .map((specifier) => ({ specifier, own: ownPath(file, specifier) }))
-          .filter(({ specifier, own }) => (own === null ? (packages ? !packages.test(specifier) : false) : !may.test(own)))
+          .filter(({ specifier, own }) =>
+            own === null ? (packages ? !packages.test(specifier) : false) : !may.test(own),
+          )
           .map(({ specifier }) => `${file} imports ${specifier}`),
       );
     expect(broken).toEqual([]);
@@ -82,7 +119,9 @@ describe('import rules', () => {
         const own = ownPath(file, specifier);
         if (own === null) return [];
         const other = featureOf(own);
-        return (other && other !== feature) || own.startsWith('src/routes/') ? [`${file} imports ${specifier}`] : [];
+        return (other && other !== feature) || own.startsWith('src/routes/')
+          ? [`${file} imports ${specifier}`]
+          : [];
       });
     });
     expect(broken).toEqual([]);
@@ -96,7 +135,12 @@ describe('import rules', () => {
   });
 
   it('there are no barrels but the solver core, the models, the migrations and the route list', () => {
-    const allowed = ['workers/solver/core/index.ts', 'server/models/index.ts', 'server/migrations/index.ts', 'server/routes/index.ts'];
+    const allowed = [
+      'workers/solver/core/index.ts',
+      'server/models/index.ts',
+      'server/migrations/index.ts',
+      'server/routes/index.ts',
+    ];
     expect(files.filter((file) => /\/index\.tsx?$/.test(file) && !allowed.includes(file))).toEqual([]);
   });
 });
@@ -105,11 +149,27 @@ describe('house rules', () => {
   const top = readdirSync(root);
 
   it('the top level holds what it must and nothing else', () => {
-    const fixed = ['README.md', 'DEVELOPERS.md', 'package.json', 'tsconfig.json', 'vite.config.ts', 'tailwind.config.ts', 'index.html', 'src', 'server', 'shared', 'workers', 'tests', 'fixtures'];
+    const fixed = [
+      'README.md',
+      'DEVELOPERS.md',
+      'package.json',
+      'tsconfig.json',
+      'vite.config.ts',
+      'tailwind.config.ts',
+      'index.html',
+      'src',
+      'server',
+      'shared',
+      'workers',
+      'tests',
+      'fixtures',
+    ];
     const tools = ['package-lock.json', 'eslint.config.js'];
     const made = ['node_modules', 'dist', 'data'];
     expect(fixed.filter((name) => !top.includes(name))).toEqual([]);
-    expect(top.filter((name) => !name.startsWith('.') && ![...fixed, ...tools, ...made].includes(name))).toEqual([]);
+    expect(
+      top.filter((name) => !name.startsWith('.') && ![...fixed, ...tools, ...made].includes(name)),
+    ).toEqual([]);
   });
 
   it('names no package registry and nothing is fetched from elsewhere at run time', () => {

@@ -39,7 +39,8 @@ export async function openDevice(
   });
   page.on('request', (request) => {
     const url = new URL(request.url());
-    if (url.protocol.startsWith('http') && url.origin !== new URL(baseURL).origin) outside.push(request.url());
+    if (url.protocol.startsWith('http') && url.origin !== new URL(baseURL).origin)
+      outside.push(request.url());
   });
   return { context, page, complaints, outside };
 }
@@ -49,5 +50,7 @@ export async function axeFaults(page: Page): Promise<string[]> {
   const { violations } = await new AxeBuilder({ page })
     .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
     .analyze();
-  return violations.flatMap((v) => v.nodes.map((node) => `${v.id}: ${node.target.join(' ')} ${node.failureSummary ?? ''}`));
+  return violations.flatMap((v) =>
+    v.nodes.map((node) => `${v.id}: ${node.target.join(' ')} ${node.failureSummary ?? ''}`),
+  );
 }

@@ -16,7 +16,11 @@ async function freePort(): Promise<number> {
   return address.port;
 }
 
-export type RunningShop = { readonly address: string; readonly output: () => string; stop(): Promise<number | null> };
+export type RunningShop = {
+  readonly address: string;
+  readonly output: () => string;
+  stop(): Promise<number | null>;
+};
 
 /** Starts dist/server/main.js and waits until /healthz answers. `demo` loads the demo shop first. */
 export async function startShop({ demo }: { demo: boolean }): Promise<RunningShop> {
@@ -25,7 +29,13 @@ export async function startShop({ demo }: { demo: boolean }): Promise<RunningSho
   const address = `http://127.0.0.1:${port}`;
   const child = spawn(process.execPath, [join(root, 'dist/server/main.js')], {
     cwd: root,
-    env: { ...process.env, NODE_ENV: 'production', PORT: String(port), DATA_DIR: dataDir, DEMO: demo ? 'on' : 'off' },
+    env: {
+      ...process.env,
+      NODE_ENV: 'production',
+      PORT: String(port),
+      DATA_DIR: dataDir,
+      DEMO: demo ? 'on' : 'off',
+    },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
   let output = '';

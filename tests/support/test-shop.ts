@@ -51,7 +51,8 @@ export async function openTestShop(options: { empty?: boolean; trial?: boolean }
     });
     const hash = await passwordHash(TEST_PASSWORD);
     await write(async () => {
-      for (const role of ROLES) if (role !== 'manager') await makePerson({ name: `A ${role}`, email: emailOf(role), role, hash });
+      for (const role of ROLES)
+        if (role !== 'manager') await makePerson({ name: `A ${role}`, email: emailOf(role), role, hash });
     });
   }
   const logged: string[] = [];
@@ -81,8 +82,11 @@ export async function openTestShop(options: { empty?: boolean; trial?: boolean }
       const known = agents.get(role);
       if (known) return known;
       const agent = request.agent(app);
-      const answer = await agent.post('/api/auth/sign-in/email').send({ email: emailOf(role), password: TEST_PASSWORD });
-      if (answer.status !== 200) throw new Error(`signing in as ${role} answered ${answer.status}: ${answer.text}`);
+      const answer = await agent
+        .post('/api/auth/sign-in/email')
+        .send({ email: emailOf(role), password: TEST_PASSWORD });
+      if (answer.status !== 200)
+        throw new Error(`signing in as ${role} answered ${answer.status}: ${answer.text}`);
       agents.set(role, agent);
       return agent;
     },

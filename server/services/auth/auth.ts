@@ -23,9 +23,18 @@ export function createAuth(sequelize: Sequelize, config: Config) {
       return config.trial && host ? [`http://${host}`] : [config.publicUrl];
     },
     emailAndPassword: { enabled: true, disableSignUp: true, minPasswordLength: 10, maxPasswordLength: 128 },
-    user: { additionalFields: { role: { type: 'string', input: false }, closed: { type: 'number', input: false, defaultValue: 0 } } },
+    user: {
+      additionalFields: {
+        role: { type: 'string', input: false },
+        closed: { type: 'number', input: false, defaultValue: 0 },
+      },
+    },
     session: { expiresIn: 60 * 60 * 24 * 14, updateAge: 60 * 60 * 24 },
-    advanced: { useSecureCookies: !config.trial, cookiePrefix: 'barwright', database: { generateId: () => crypto.randomUUID() } },
+    advanced: {
+      useSecureCookies: !config.trial,
+      cookiePrefix: 'barwright',
+      database: { generateId: () => crypto.randomUUID() },
+    },
     rateLimit: {
       enabled: true,
       storage: 'database',
@@ -39,7 +48,9 @@ export function createAuth(sequelize: Sequelize, config: Config) {
           before: async (session) => {
             const person = await Person.findByPk(session.userId);
             if (!person || person.closed === 1)
-              throw new APIError('FORBIDDEN', { message: 'This person no longer has access. Ask a manager.' });
+              throw new APIError('FORBIDDEN', {
+                message: 'This person no longer has access. Ask a manager.',
+              });
           },
         },
       },

@@ -8,7 +8,9 @@ export async function setPassword(personId: string, hash: string): Promise<void>
   const sequelize = Person.sequelize;
   if (!sequelize) throw new Error('no database is open');
   const now = new Date().toISOString();
-  await sequelize.query(`DELETE FROM "account" WHERE "userId" = $1 AND "providerId" = 'credential'`, { bind: [personId] });
+  await sequelize.query(`DELETE FROM "account" WHERE "userId" = $1 AND "providerId" = 'credential'`, {
+    bind: [personId],
+  });
   await sequelize.query(
     `INSERT INTO "account" ("id", "accountId", "providerId", "userId", "password", "createdAt", "updatedAt") VALUES ($1, $2, 'credential', $2, $3, $4, $4)`,
     { bind: [randomUUID(), personId, hash, now] },
@@ -27,8 +29,11 @@ export async function endSessions(personId: string): Promise<void> {
 export async function personsWithPassword(): Promise<Set<string>> {
   const sequelize = Person.sequelize;
   if (!sequelize) throw new Error('no database is open');
-  const rows = await sequelize.query<{ userId: string }>(`SELECT "userId" FROM "account" WHERE "providerId" = 'credential'`, {
-    type: QueryTypes.SELECT,
-  });
+  const rows = await sequelize.query<{ userId: string }>(
+    `SELECT "userId" FROM "account" WHERE "providerId" = 'credential'`,
+    {
+      type: QueryTypes.SELECT,
+    },
+  );
   return new Set(rows.map(({ userId }) => userId));
 }

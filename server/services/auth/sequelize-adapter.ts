@@ -77,7 +77,10 @@ export const sequelizeAdapter = (sequelize: Sequelize) => {
         const names = fields.map(([name]) => quote(name)).join(', ');
         const values = fields.map(([, value]) => `$${bind.push(value)}`).join(', ');
         // `OR ABORT` is SQLite's default; spelled out, because Sequelize runs a bare `INSERT INTO` without reading its rows.
-        const [row] = await change(`INSERT OR ABORT INTO ${quote(model)} (${names}) VALUES (${values}) RETURNING *`, bind);
+        const [row] = await change(
+          `INSERT OR ABORT INTO ${quote(model)} (${names}) VALUES (${values}) RETURNING *`,
+          bind,
+        );
         return row as never;
       },
       async findOne({ model, where }) {
@@ -96,42 +99,67 @@ export const sequelizeAdapter = (sequelize: Sequelize) => {
       },
       async count({ model, where }) {
         const bind: unknown[] = [];
-        const [row] = await all(`SELECT count(*) AS n FROM ${quote(model)}${whereSql(where ?? [], bind)}`, bind);
+        const [row] = await all(
+          `SELECT count(*) AS n FROM ${quote(model)}${whereSql(where ?? [], bind)}`,
+          bind,
+        );
         return Number(row?.n ?? 0);
       },
       async update({ model, where, update }) {
         const bind: unknown[] = [];
-        const sets = Object.entries(update as Row).map(([name, value]) => `${quote(name)} = $${bind.push(value)}`);
+        const sets = Object.entries(update as Row).map(
+          ([name, value]) => `${quote(name)} = $${bind.push(value)}`,
+        );
         const filter = whereSql(where, bind);
-        const [row] = await change(`UPDATE ${quote(model)} SET ${sets.join(', ')} WHERE ${firstRow(model, filter)} RETURNING *`, bind);
+        const [row] = await change(
+          `UPDATE ${quote(model)} SET ${sets.join(', ')} WHERE ${firstRow(model, filter)} RETURNING *`,
+          bind,
+        );
         return (row ?? null) as never;
       },
       async updateMany({ model, where, update }) {
         const bind: unknown[] = [];
         const sets = Object.entries(update).map(([name, value]) => `${quote(name)} = $${bind.push(value)}`);
-        return (await change(`UPDATE ${quote(model)} SET ${sets.join(', ')}${whereSql(where, bind)} RETURNING rowid`, bind)).length;
+        return (
+          await change(
+            `UPDATE ${quote(model)} SET ${sets.join(', ')}${whereSql(where, bind)} RETURNING rowid`,
+            bind,
+          )
+        ).length;
       },
       async delete({ model, where }) {
         const bind: unknown[] = [];
-        await change(`DELETE FROM ${quote(model)} WHERE ${firstRow(model, whereSql(where, bind))} RETURNING rowid`, bind);
+        await change(
+          `DELETE FROM ${quote(model)} WHERE ${firstRow(model, whereSql(where, bind))} RETURNING rowid`,
+          bind,
+        );
       },
       async deleteMany({ model, where }) {
         const bind: unknown[] = [];
-        return (await change(`DELETE FROM ${quote(model)}${whereSql(where, bind)} RETURNING rowid`, bind)).length;
+        return (await change(`DELETE FROM ${quote(model)}${whereSql(where, bind)} RETURNING rowid`, bind))
+          .length;
       },
       async consumeOne({ model, where }) {
         const bind: unknown[] = [];
-        const [row] = await change(`DELETE FROM ${quote(model)} WHERE ${firstRow(model, whereSql(where, bind))} RETURNING *`, bind);
+        const [row] = await change(
+          `DELETE FROM ${quote(model)} WHERE ${firstRow(model, whereSql(where, bind))} RETURNING *`,
+          bind,
+        );
         return (row ?? null) as never;
       },
       async incrementOne({ model, where, increment, set }) {
         const bind: unknown[] = [];
         const sets = [
-          ...Object.entries(increment).map(([name, by]) => `${quote(name)} = coalesce(${quote(name)}, 0) + $${bind.push(by)}`),
+          ...Object.entries(increment).map(
+            ([name, by]) => `${quote(name)} = coalesce(${quote(name)}, 0) + $${bind.push(by)}`,
+          ),
           ...Object.entries(set ?? {}).map(([name, value]) => `${quote(name)} = $${bind.push(value)}`),
         ];
         const filter = whereSql(where, bind);
-        const [row] = await change(`UPDATE ${quote(model)} SET ${sets.join(', ')} WHERE ${firstRow(model, filter)} RETURNING *`, bind);
+        const [row] = await change(
+          `UPDATE ${quote(model)} SET ${sets.join(', ')} WHERE ${firstRow(model, filter)} RETURNING *`,
+          bind,
+        );
         return (row ?? null) as never;
       },
     }),
