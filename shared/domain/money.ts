@@ -24,13 +24,23 @@ export function formatMoney(minor: number, currency: string): string {
   return `${minor < 0 && rounded !== 0 ? '−' : ''}${sign}\u00a0${grouped}${part ? `.${part}` : ''}`;
 }
 
-/** Reads `1,234.50`, `1 234,50`, `$ 98`. Null when it is no amount or has more digits than the currency. */
+/** An amount by its two usual writings: `1,234.50` or `1 234.50`, and `1.234,50` or `1 234,50`; signs and code aside. */
+const POINT = /^(\d{1,3}(?:[, ]\d{3})+|\d+)(?:\.(\d+))?$/;
+const COMMA = /^(\d{1,3}(?:[. ]\d{3})+|\d+),(\d+)$/;
+
+/**
+ * Reads `1,234.50`, `1 234,50`, `$ 98`, `98 USD`. Null when it is no amount, has more digits than the currency
+ * (`98.405` in dollars is asked, never taken for thousands), or is past whole minor units.
+ */
 export function parseMoney(text: string, currency: string): number | null {
-  const { digits } = parts(currency);
-  const plain = text.replace(/[^\d.,-]/g, '');
-  const decimal = /[.,](\d{1,2})$/.exec(plain);
-  const whole = (decimal ? plain.slice(0, decimal.index) : plain).replace(/[.,]/g, '');
-  if (!/^\d+$/.test(whole) || (decimal?.[1]?.length ?? 0) > digits) return null;
-  const minor = Number(whole) * 10 ** digits + Number((decimal?.[1] ?? '').padEnd(digits, '0') || 0);
+  const { digits, sign } = parts(currency);
+  const plain = text
+    .replace(/[\s\u2009\u202f]+/g, ' ')
+    .replaceAll(sign, '')
+    .replace(new RegExp(currency, 'i'), '')
+    .trim();
+  const [, whole, part = ''] = POINT.exec(plain) ?? COMMA.exec(plain) ?? [];
+  if (whole === undefined || part.length > digits) return null;
+  const minor = Number(whole.replace(/[., ]/g, '')) * 10 ** digits + Number(part.padEnd(digits, '0') || 0);
   return Number.isSafeInteger(minor) ? minor : null;
 }

@@ -114,6 +114,10 @@ export const SolveGroupResult = z.strictObject({
 
 export const SolveResult = z.strictObject({ version: z.literal(1), groups: z.array(SolveGroupResult) });
 
+export type SolveRequest = z.infer<typeof SolveRequest>;
+export type SolveResult = z.infer<typeof SolveResult>;
+export type SolveGroupResult = z.infer<typeof SolveGroupResult>;
+
 /* The schemas and the plain types of the domain must not part; either line fails to compile when they do. */
 type Same<A, B> = [A] extends [B] ? ([B] extends [A] ? true : never) : never;
 export const REQUEST_IS_THE_DOMAIN_TYPE: Same<z.infer<typeof SolveRequest>, domain.SolveRequest> = true;

@@ -91,7 +91,10 @@ export type PartListReading = {
   readonly headingRow: number | null;
   readonly columns: readonly PartListColumn[];
   /** Rows that are neither line nor problem. */
-  readonly ignored: readonly { readonly row: number; readonly kind: 'blank' | 'heading' | 'total' | 'skipped' }[];
+  readonly ignored: readonly {
+    readonly row: number;
+    readonly kind: 'blank' | 'heading' | 'total' | 'skipped';
+  }[];
   /** Every physical row as read, for the preview and for fixing in place. */
   readonly rows: readonly { readonly row: number; readonly cells: readonly string[] }[];
   readonly encoding: string;

@@ -124,13 +124,21 @@ function pairsOf(text: string): Set<string> {
   return new Set(Array.from({ length: plain.length - 1 }, (_, i) => plain.slice(i, i + 2)));
 }
 
+let cataloguePairs: readonly { name: string; have: ReadonlySet<string> }[] | null = null;
+
+/** Made once: a list whose columns are mapped wrongly asks about every one of its rows. */
+function pairsOfCatalogue() {
+  cataloguePairs ??= catalogueNames().map((name) => ({ name, have: pairsOf(name) }));
+  return cataloguePairs;
+}
+
 /** Up to five names that share most letter pairs with the text (Dice's coefficient over one half). */
 export function nearestNames(text: string): string[] {
   const wanted = pairsOf(text);
-  return catalogueNames()
-    .map((name) => {
-      const have = pairsOf(name);
-      const shared = [...have].filter((pair) => wanted.has(pair)).length;
+  return pairsOfCatalogue()
+    .map(({ name, have }) => {
+      let shared = 0;
+      for (const pair of wanted) if (have.has(pair)) shared += 1;
       return { name, score: (2 * shared) / (have.size + wanted.size) };
     })
     .filter(({ score }) => score > 0.5)

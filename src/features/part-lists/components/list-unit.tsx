@@ -1,0 +1,47 @@
+import { LENGTH_UNITS, type LengthUnit } from '#shared/domain/units.ts';
+import type { PartListReading } from '#shared/domain/part-list/types.ts';
+import { Button } from '#src/components/button.tsx';
+import { ChipField } from '#src/components/chip-field.tsx';
+import { useFormats } from '#src/lib/formats.ts';
+import { UNIT_REASONS, UNIT_WORDS } from '#src/features/part-lists/hooks/list-words.ts';
+
+type ListUnitProps = { reading: PartListReading; onUnit: (unit: LengthUnit | null) => void };
+
+const BARE = /^[\d\s.,/-]+$/;
+const CHOICES = LENGTH_UNITS.map((unit) => ({ value: unit, label: UNIT_WORDS[unit] }));
+
+/** What a bare number means on this list: said large, with its reason and one length of the list as proof. */
+export function ListUnit({ reading, onUnit }: ListUnitProps) {
+  const { length } = useFormats();
+  const { unit, unitFrom, lines } = reading;
+  const proof = lines.find(({ lengthText }) => BARE.test(lengthText));
+  return (
+    <section className="border-[1.5px] border-ink bg-chalk px-4 py-4 sm:px-5">
+      <h2 className="text-[1.0625rem] text-muted">Lengths without a unit are</h2>
+      <p className="font-head text-[2.5rem] leading-none font-semibold">{UNIT_WORDS[unit]}</p>
+      <p className="mt-2">{UNIT_REASONS[unitFrom]}</p>
+      {proof ? (
+        <p className="text-muted">
+          Row {proof.row}: <span className="font-mono text-ink">{proof.lengthText.trim()}</span> is read as{' '}
+          <span className="font-mono text-ink">{length(proof.lengthNm)}</span>.
+        </p>
+      ) : (
+        lines.length > 0 && <p className="text-muted">Every length read so far carries its own unit.</p>
+      )}
+      <div className="mt-3 flex flex-wrap items-end gap-3">
+        <ChipField
+          label="Unit of lengths without a unit"
+          hideLabel
+          value={unit}
+          onChange={onUnit}
+          choices={CHOICES}
+        />
+        {unitFrom === 'given' && (
+          <Button variant="quiet" onClick={() => onUnit(null)}>
+            As the file says
+          </Button>
+        )}
+      </div>
+    </section>
+  );
+}

@@ -1,0 +1,139 @@
+import { useMemo } from 'react';
+import type { PartLine } from '#shared/schemas/jobs.ts';
+import { Button } from '#src/components/button.tsx';
+import { EmptyState } from '#src/components/empty-state.tsx';
+import { SearchField } from '#src/components/search-field.tsx';
+import { SelectField } from '#src/components/select-field.tsx';
+import { countOf, useFormats } from '#src/lib/formats.ts';
+import { useSearch } from '#src/lib/use-search.ts';
+import { ReadLength } from '#src/features/part-lists/components/read-length.tsx';
+import { Remarks } from '#src/features/part-lists/components/remarks.tsx';
+import { SectionWords } from '#src/features/part-lists/components/section-words.tsx';
+import { VirtualTable, type VirtualColumn } from '#src/features/part-lists/components/virtual-table.tsx';
+import { LINE_STATES, filterLines, readLineFilter, type LineState } from '#src/features/part-lists/hooks/filter-lines.ts';
+
+const NO_FILTER = { section: null, mark: null, state: null };
+const STATE_WORDS: Readonly<Record<LineState, string>> = {
+  open: 'pieces not in a plan',
+  planned: 'planned, not all cut',
+  cut: 'all cut',
+};
+
+/** Words of a line that are not its size: where it goes and how it is finished. */
+function sayings({ note, finish, neededBy, remarks }: PartLine): string[] {
+  return [note, finish, neededBy && `needed by ${neededBy}`, ...remarks].filter((text) => text !== '');
+}
+
+/** The lines of a list with what is planned and cut of each; filters live in the address. */
+export function PartLines({ lines }: { lines: readonly PartLine[] }) {
+  const { mass } = useFormats();
+  const [get, set] = useSearch();
+  const filter = readLineFilter(get);
+  const { section, mark, state } = filter;
+  const shown = useMemo(() => filterLines(lines, { section, mark, state }), [lines, section, mark, state]);
+  const columns: VirtualColumn<PartLine>[] = [
+    { key: 'row', head: 'Row', track: '3.5rem', align: 'right', mono: true, cell: ({ row }) => row },
+    {
+      key: 'mark',
+      head: 'Mark',
+      track: 'minmax(6rem,1fr)',
+      mono: true,
+      rowHead: true,
+      cell: (line) => line.mark,
+    },
+    {
+      key: 'section',
+      head: 'Section',
+      track: 'minmax(11rem,2.6fr)',
+      cell: (line) => (
+        <>
+          <SectionWords section={line.section} sectionText={line.sectionText} />
+          <Remarks remarks={sayings(line)} />
+        </>
+      ),
+    },
+    {
+      key: 'grade',
+      head: 'Grade',
+      track: 'minmax(5rem,1fr)',
+      mono: true,
+      cell: ({ grade }) => grade || <span className="font-sans text-muted">none</span>,
+    },
+    {
+      key: 'length',
+      head: 'Length',
+      track: 'minmax(8rem,1.2fr)',
+      align: 'right',
+      mono: true,
+      cell: (line) => <ReadLength lengthNm={line.lengthNm} widthNm={line.widthNm} />,
+    },
+    {
+      key: 'mass',
+      head: 'Mass of one',
+      track: '5.5rem',
+      align: 'right',
+      mono: true,
+      cell: ({ pieceMassMg }) => mass(pieceMassMg),
+    },
+    { key: 'pieces', head: 'Pieces', track: '4.5rem', align: 'right', mono: true, cell: ({ quantity }) => quantity },
+    { key: 'planned', head: 'Planned', track: '4.5rem', align: 'right', mono: true, cell: ({ planned }) => planned },
+    { key: 'cut', head: 'Cut', track: '4rem', align: 'right', mono: true, cell: ({ cut }) => cut },
+  ];
+  return (
+    <>
+      <div className="mb-3 grid max-w-4xl grid-cols-2 gap-4 sm:grid-cols-3">
+        <SearchField label="Section" mono value={section} onSearch={(text) => set({ section: text })} />
+        <SearchField label="Mark" mono value={mark} onSearch={(text) => set({ mark: text })} />
+        <SelectField
+          label="State"
+          className="max-sm:col-span-2"
+          value={state ?? ''}
+          onChange={(event) => set({ state: event.target.value })}
+          choices={[
+            { value: '', label: 'all lines' },
+            ...LINE_STATES.map((known) => ({ value: known, label: STATE_WORDS[known] })),
+          ]}
+        />
+      </div>
+      <p role="status" className="mb-3 text-muted">
+        {shown.length === lines.length
+          ? countOf(lines.length, 'line', 'lines')
+          : `${shown.length} of ${countOf(lines.length, 'line', 'lines')}`}
+      </p>
+      {shown.length === 0 ? (
+        <EmptyState title="No line fits" actions={<Button onClick={() => set(NO_FILTER)}>Show all lines</Button>}>
+          Take the section, the mark or the state away.
+        </EmptyState>
+      ) : (
+        <VirtualTable
+          caption="Lines of the part list"
+          columns={columns}
+          rows={shown}
+          rowKey={({ id }) => id}
+          block={(line) => (
+            <>
+              <p className="flex items-baseline gap-3">
+                <span className="font-mono font-bold break-all">{line.mark}</span>
+                <span className="ml-auto text-[0.9375rem] whitespace-nowrap text-muted">row {line.row}</span>
+              </p>
+              <p>
+                <SectionWords section={line.section} sectionText={line.sectionText} />
+                {line.grade && <span className="ml-3 font-mono">{line.grade}</span>}
+              </p>
+              <p className="flex flex-wrap gap-x-3 font-mono text-[0.9375rem]">
+                <ReadLength lengthNm={line.lengthNm} widthNm={line.widthNm} />
+                <span className="ml-auto">{mass(line.pieceMassMg)}</span>
+              </p>
+              <p className="text-[0.9375rem]">
+                <span className="font-mono">{line.quantity}</span> {line.quantity === 1 ? 'piece' : 'pieces'},{' '}
+                <span className="font-mono">{line.planned}</span> planned,{' '}
+                <span className="font-mono">{line.cut}</span> cut
+              </p>
+              <Remarks remarks={sayings(line)} />
+            </>
+          )}
+        />
+      )}
+    </>
+  );
+}

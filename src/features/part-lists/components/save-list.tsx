@@ -1,0 +1,92 @@
+import type { Ref } from 'react';
+import { Button } from '#src/components/button.tsx';
+import { Fault } from '#src/components/fault.tsx';
+import { Notice } from '#src/components/notice.tsx';
+import { TextField } from '#src/components/text-field.tsx';
+import { ApiError, faultWords } from '#src/lib/api-error.ts';
+import { whatIsMissing, type UploadDraft, type UploadEvent } from '#src/features/part-lists/hooks/upload-draft.ts';
+
+type SaveListProps = {
+  draft: UploadDraft;
+  dispatch: (event: UploadEvent) => void;
+  saving: boolean;
+  /** Why the shop did not take it. */
+  error: unknown;
+  onSave: () => void;
+  saveButton: Ref<HTMLButtonElement>;
+};
+
+const MOST_ISSUES = 50;
+
+/** What the shop found when it read the list again, row by row. Nothing on the page is lost by it. */
+function Refusal({ error }: { error: unknown }) {
+  const words = faultWords(error);
+  const issues = error instanceof ApiError ? error.issues : [];
+  if (issues.length === 0) return <Fault {...words} />;
+  return (
+    <Notice tone="fault" live title={words.title}>
+      <p>{words.message}</p>
+      <ul className="mt-1.5 list-none p-0">
+        {issues.slice(0, MOST_ISSUES).map(({ row, path, message }) => (
+          <li key={`${row ?? ''} ${path} ${message}`}>
+            {row ? (
+              <>
+                Row <span className="font-mono font-bold">{row}</span>:{' '}
+              </>
+            ) : null}
+            {message}
+          </li>
+        ))}
+      </ul>
+      {issues.length > MOST_ISSUES && <p>and {issues.length - MOST_ISSUES} more</p>}
+    </Notice>
+  );
+}
+
+/** Name, revision, and the one act of this page. */
+export function SaveList({ draft, dispatch, saving, error, onSave, saveButton }: SaveListProps) {
+  const missing = whatIsMissing(draft);
+  return (
+    <form
+      noValidate
+      onSubmit={(event) => {
+        event.preventDefault();
+        if (missing === null) onSave();
+      }}
+      className="grid gap-4"
+    >
+      <div className="grid max-w-2xl gap-4 sm:grid-cols-[minmax(0,1fr)_9rem]">
+        <TextField
+          label="Name of the list"
+          required
+          autoComplete="off"
+          maxLength={80}
+          value={draft.name}
+          onChange={(event) => dispatch({ type: 'name-typed', name: event.target.value })}
+        />
+        <TextField
+          label="Revision"
+          mono
+          autoComplete="off"
+          maxLength={20}
+          value={draft.revision}
+          onChange={(event) => dispatch({ type: 'revision-typed', revision: event.target.value })}
+        />
+      </div>
+      {error !== null && <Refusal error={error} />}
+      <div className="flex flex-wrap items-center gap-x-5 gap-y-2">
+        <Button
+          ref={saveButton}
+          type="submit"
+          variant="act"
+          disabled={missing !== null}
+          busy={saving}
+          busyLabel="Saving"
+        >
+          Save part list
+        </Button>
+        {missing && <p className="text-muted">{missing}</p>}
+      </div>
+    </form>
+  );
+}

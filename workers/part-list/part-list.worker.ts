@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { openPartList } from '#workers/part-list/open-part-list.ts';
+
+expose(openPartList());
