@@ -71,4 +71,8 @@ function run(args: readonly string[]): void {
   }
 }
 
+// `part-list list.csv | head` closes the pipe before the end; that is no fault.
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  if (error.code !== 'EPIPE') throw error;
+});
 run(process.argv.slice(2));

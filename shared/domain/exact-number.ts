@@ -4,7 +4,7 @@ export type Ratio = { readonly numerator: bigint; readonly denominator: bigint }
 /** Which mark stands before the decimals of a list; the other one, if it stands at all, groups thousands. */
 export type DecimalMark = '.' | ',';
 
-export type NumberForm = 'whole' | 'decimal' | 'fraction';
+type NumberForm = 'whole' | 'decimal' | 'fraction';
 
 export type NumberReading =
   | { readonly outcome: 'read'; readonly value: Ratio; readonly form: NumberForm }

@@ -3,9 +3,9 @@ import { Link, type LinkProps } from 'react-router-dom';
 import { classNames } from '#src/components/class-names.ts';
 
 /** `act` is red oxide and stands once on a screen: the one action that matters there. */
-export type ButtonVariant = 'plain' | 'act' | 'quiet' | 'danger';
+type ButtonVariant = 'plain' | 'act' | 'quiet' | 'danger';
 /** `bench` is for gloves: 64 px. */
-export type ButtonSize = 'small' | 'normal' | 'big' | 'bench';
+type ButtonSize = 'small' | 'normal' | 'big' | 'bench';
 
 const VARIANTS: Readonly<Record<ButtonVariant, string>> = {
   plain: 'border-ink text-ink hover:bg-soap',

@@ -3,7 +3,7 @@ import { TriangleAlert } from 'lucide-react';
 import { classNames } from '#src/components/class-names.ts';
 
 /** What the control inside a field must carry, so that label, hint and error belong to it. */
-export type FieldIds = {
+type FieldIds = {
   id: string;
   'aria-describedby': string | undefined;
   'aria-invalid': true | undefined;

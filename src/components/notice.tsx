@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { CircleCheck, Info, OctagonAlert, TriangleAlert } from 'lucide-react';
 import { classNames } from '#src/components/class-names.ts';
 
-export type NoticeTone = 'info' | 'fault' | 'caution' | 'good';
+type NoticeTone = 'info' | 'fault' | 'caution' | 'good';
 
 /** Yellow is kept for cautions: where a hand, a foot or an eye may be hurt. The sign says it too. */
 const TONES = {

@@ -14,7 +14,7 @@ type NumberFieldProps = FieldFrame & {
 };
 
 /** Reads a whole number; thin gaps and commas between thousands are allowed. */
-export function readWhole(text: string, min: number, max: number): { value: number } | { error: string } {
+function readWhole(text: string, min: number, max: number): { value: number } | { error: string } {
   const digits = text.trim().replace(/(?<=\d)[\s,\u2009\u202f](?=\d{3}\b)/g, '');
   if (!/^-?\d{1,15}$/.test(digits))
     return { error: `“${text.trim()}” is not a whole number. Type digits only.` };

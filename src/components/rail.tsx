@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { NavLink } from 'react-router-dom';
 import { classNames } from '#src/components/class-names.ts';
 
-export type RailItem = { to: string; label: string; icon: ReactNode };
+type RailItem = { to: string; label: string; icon: ReactNode };
 
 type RailProps = {
   items: readonly RailItem[];

@@ -1,7 +1,7 @@
 import type { ComponentProps } from 'react';
 import { Field, controlLook, type FieldFrame } from '#src/components/field.tsx';
 
-export type Choice = { value: string; label: string; disabled?: boolean };
+type Choice = { value: string; label: string; disabled?: boolean };
 
 type SelectFieldProps = FieldFrame &
   Omit<ComponentProps<'select'>, 'className' | 'id' | 'children'> & {

@@ -50,7 +50,7 @@ export function Component() {
       }
     >
       <JobFigures job={job} />
-      <h2 className="mt-8 mb-2">Part lists</h2>
+      <h2 className="mt-8 mb-2 first:mt-0">Part lists</h2>
       {partLists.length === 0 ? (
         <EmptyState title="No part list yet" actions={<TemplateLinks />}>
           {mayUpload

@@ -187,6 +187,8 @@ describe('rows', () => {
       'B-2,2,L3x3x1/4,42,,',
       'Total,4,,,,',
       ',4,,,,',
+      ',,,,,877.5',
+      'Checked in the yard,,,,,',
     );
     expect(reading.lines.map(({ row }) => row)).toEqual([3, 6]);
     expect(reading.problems).toEqual([]);
@@ -197,6 +199,8 @@ describe('rows', () => {
       { row: 5, kind: 'heading' },
       { row: 7, kind: 'total' },
       { row: 8, kind: 'total' },
+      { row: 9, kind: 'total' },
+      { row: 10, kind: 'heading' },
     ]);
   });
 

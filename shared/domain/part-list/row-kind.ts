@@ -39,8 +39,8 @@ export function rowKind({ mark, quantity, section, length, all }: TellingCells):
 
 /** No mark, no section, no length: a line of words, a sum of counts and masses, or the rest of a part. */
 function loneRow(quantity: string, written: readonly string[]): RowKind {
-  if (quantity === '') return 'heading';
-  return written.some((cell) => /[a-z]/i.test(cell)) ? 'part' : 'total';
+  if (!written.some((cell) => /\p{L}/u.test(cell))) return 'total';
+  return quantity === '' ? 'heading' : 'part';
 }
 
 function isMarkAlone(mark: string): boolean {

@@ -5,6 +5,7 @@ import { progressWords } from '#src/lib/progress-words.ts';
 /** What a job asks for and how far it has come. */
 export function JobFigures({ job }: { job: Job }) {
   const { partLists, pieces, piecesPlanned: planned, piecesCut: cut } = job;
+  if (partLists === 0) return null;
   return (
     <FigureRow>
       <Figure value={partLists} label={partLists === 1 ? 'part list' : 'part lists'} />

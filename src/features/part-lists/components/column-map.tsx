@@ -72,14 +72,14 @@ export function ColumnMap({ columns, onColumn, onConfirm }: ColumnMapProps) {
       {unsure.length > 0 && (
         <Notice
           className="mb-3"
-          title={`Look at column ${unsure.map(({ index }) => columnLetter(index)).join(', ')}`}
+          title={`Look at ${unsure.length === 1 ? 'column' : 'columns'} ${unsure.map(({ index }) => columnLetter(index)).join(', ')}`}
           actions={
             <Button size="small" onClick={onConfirm}>
               The columns are right
             </Button>
           }
         >
-          The heading does not say for certain what is in it. Compare the cells with what they are read as.
+          What is in them is not said for certain. Compare the cells with what they are read as.
         </Notice>
       )}
       <Table caption="Columns of the file" columns={table} rows={columns} rowKey={({ index }) => index} />

@@ -24,5 +24,5 @@ export function FileFacts({ source, reading }: { source: Source; reading: PartLi
     { label: 'Headings', value: reading.headingRow === null ? 'none found' : `row ${reading.headingRow}` },
     ...passedOver(reading),
   ];
-  return <Facts facts={facts} className="content-start lg:grid-cols-3" />;
+  return <Facts facts={facts} className="grid-cols-2 content-start lg:grid-cols-3" />;
 }

@@ -1,4 +1,5 @@
 import { useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
+import { ChevronRight } from 'lucide-react';
 import type { PartListReading } from '#shared/domain/part-list/types.ts';
 import { Fault } from '#src/components/fault.tsx';
 import { Figure, FigureRow } from '#src/components/figure-row.tsx';
@@ -92,11 +93,16 @@ export function ListReview({
       <details
         open={columnsOpen}
         onToggle={(event) => setColumnsOpen(event.currentTarget.open)}
-        className="border-y border-line py-1"
+        className="group border-y border-line py-1"
       >
-        <summary className="flex min-h-11 items-center gap-3 font-head text-[1.3125rem] font-semibold">
-          Columns
-          <span className="font-sans text-base font-normal text-muted">{columnsInWords(reading.columns)}</span>
+        <summary className="flex min-h-11 list-none items-center gap-2 [&::-webkit-details-marker]:hidden">
+          <ChevronRight
+            aria-hidden
+            size={20}
+            className="shrink-0 transition-transform group-open:rotate-90 motion-reduce:transition-none"
+          />
+          <h2>Columns</h2>
+          <span className="ml-2 text-muted">{columnsInWords(reading.columns)}</span>
         </summary>
         <div className="pt-1 pb-4">
           <ColumnMap

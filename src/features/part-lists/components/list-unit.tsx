@@ -2,7 +2,7 @@ import { LENGTH_UNITS, type LengthUnit } from '#shared/domain/units.ts';
 import type { PartListReading } from '#shared/domain/part-list/types.ts';
 import { Button } from '#src/components/button.tsx';
 import { ChipField } from '#src/components/chip-field.tsx';
-import { useFormats } from '#src/lib/formats.ts';
+import { ReadLength } from '#src/features/part-lists/components/read-length.tsx';
 import { UNIT_REASONS, UNIT_WORDS } from '#src/features/part-lists/hooks/list-words.ts';
 
 type ListUnitProps = { reading: PartListReading; onUnit: (unit: LengthUnit | null) => void };
@@ -12,8 +12,8 @@ const CHOICES = LENGTH_UNITS.map((unit) => ({ value: unit, label: UNIT_WORDS[uni
 
 /** What a bare number means on this list: said large, with its reason and one length of the list as proof. */
 export function ListUnit({ reading, onUnit }: ListUnitProps) {
-  const { length } = useFormats();
-  const { unit, unitFrom, lines } = reading;
+  const { unit, unitFrom, lines, mapping } = reading;
+  const split = mapping.feet !== undefined || mapping.inches !== undefined;
   const proof = lines.find(({ lengthText }) => BARE.test(lengthText));
   return (
     <section className="border-[1.5px] border-ink bg-chalk px-4 py-4 sm:px-5">
@@ -23,10 +23,19 @@ export function ListUnit({ reading, onUnit }: ListUnitProps) {
       {proof ? (
         <p className="text-muted">
           Row {proof.row}: <span className="font-mono text-ink">{proof.lengthText.trim()}</span> is read as{' '}
-          <span className="font-mono text-ink">{length(proof.lengthNm)}</span>.
+          <span className="font-mono text-ink">
+            <ReadLength lengthNm={proof.lengthNm} />
+          </span>
+          .
         </p>
       ) : (
-        lines.length > 0 && <p className="text-muted">Every length read so far carries its own unit.</p>
+        lines.length > 0 && (
+          <p className="text-muted">
+            {split
+              ? 'Feet and inches stand in columns of their own.'
+              : 'Every length read so far carries its own unit.'}
+          </p>
+        )
       )}
       <div className="mt-3 flex flex-wrap items-end gap-3">
         <ChipField

@@ -19,9 +19,15 @@ const STATE_WORDS: Readonly<Record<LineState, string>> = {
   cut: 'all cut',
 };
 
-/** Words of a line that are not its size: where it goes and how it is finished. */
-function sayings({ note, finish, neededBy, remarks }: PartLine): string[] {
-  return [note, finish, neededBy && `needed by ${neededBy}`, ...remarks].filter((text) => text !== '');
+/** What the list says beside the size: where the piece goes, how it is finished, by when. */
+function Sayings({ line: { note, finish, neededBy, remarks } }: { line: PartLine }) {
+  const said = [note, finish, neededBy && `needed by ${neededBy}`].filter((text) => text !== '');
+  return (
+    <>
+      {said.length > 0 && <span className="block text-[0.9375rem] text-muted">{said.join(' · ')}</span>}
+      <Remarks remarks={remarks} />
+    </>
+  );
 }
 
 /** The lines of a list with what is planned and cut of each; filters live in the address. */
@@ -48,7 +54,7 @@ export function PartLines({ lines }: { lines: readonly PartLine[] }) {
       cell: (line) => (
         <>
           <SectionWords section={line.section} sectionText={line.sectionText} />
-          <Remarks remarks={sayings(line)} />
+          <Sayings line={line} />
         </>
       ),
     },
@@ -129,7 +135,7 @@ export function PartLines({ lines }: { lines: readonly PartLine[] }) {
                 <span className="font-mono">{line.planned}</span> planned,{' '}
                 <span className="font-mono">{line.cut}</span> cut
               </p>
-              <Remarks remarks={sayings(line)} />
+              <Sayings line={line} />
             </>
           )}
         />

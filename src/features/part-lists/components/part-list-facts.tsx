@@ -10,7 +10,7 @@ export function PartListFacts({ partList }: { partList: PartListSummary }) {
   const { time } = useFormats();
   return (
     <Facts
-      className="content-start lg:grid-cols-3"
+      className="grid-cols-2 content-start lg:grid-cols-3"
       facts={[
         {
           label: 'File',

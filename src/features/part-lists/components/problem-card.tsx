@@ -129,6 +129,7 @@ export function ProblemCard({ row, sameRows, acts }: ProblemCardProps) {
           <Button
             size="small"
             variant="quiet"
+            className="sm:-mt-1.5"
             onClick={() => (row.state === 'fixed' ? acts.onUnfix(row.row) : acts.onTakeBack(row.row))}
             aria-label={`${row.state === 'fixed' ? 'Undo' : 'Take back'} ${name}`}
           >

@@ -78,7 +78,7 @@ export function ProblemLine({ id, problem, sameRows, onFix, onLeaveOut, onPass }
               Use
             </Button>
           </div>
-          {choices.length > 0 && <span className="self-end pb-2.5 text-muted max-sm:w-full max-sm:pb-0">or</span>}
+          {choices.length > 0 && <span className="self-end pb-2.5 text-muted max-lg:hidden">or</span>}
           {choices.map((choice) => (
             <Button
               key={choice}

@@ -48,6 +48,7 @@ export function Upload({ personId, jobId }: { personId: string; jobId: number })
       },
     );
   };
+  const choose = <ChooseList onSource={(chosen) => dispatch({ type: 'source-chosen', source: chosen })} />;
   const another = (
     <Button onClick={() => (hasDecisions(draft) ? setAsking(true) : putAway())}>Take another file</Button>
   );
@@ -55,7 +56,7 @@ export function Upload({ personId, jobId }: { personId: string; jobId: number })
   return (
     <>
       {!source ? (
-        <ChooseList onSource={(chosen) => dispatch({ type: 'source-chosen', source: chosen })} />
+        choose
       ) : fault && !preview ? (
         <>
           <Fault title="The list was not read" message={fault} onRetry={retry} className="mb-4" />
@@ -64,9 +65,17 @@ export function Upload({ personId, jobId }: { personId: string; jobId: number })
       ) : !preview ? (
         <Busy label={`Reading ${source.kind === 'paste' ? 'the pasted rows' : source.name}`} />
       ) : preview.reading.fatal && preview.reading.columns.length === 0 ? (
-        <Notice tone="fault" live title={`${source.name} cannot be read as a part list`} actions={another}>
-          {preview.reading.fatal.message}
-        </Notice>
+        <>
+          <Notice
+            tone="fault"
+            live
+            title={`${source.kind === 'paste' ? 'What was pasted' : source.name} cannot be read as a part list`}
+            className="mb-6"
+          >
+            {preview.reading.fatal.message}
+          </Notice>
+          {choose}
+        </>
       ) : (
         <ListReview
           draft={draft}

@@ -58,6 +58,8 @@ export function VirtualTable<Row>({ caption, columns, rows, rowKey, block }: Vir
     estimateSize: () => (wide ? ROW_HEIGHT : BLOCK_HEIGHT),
     overscan: OVERSCAN,
     scrollMargin: top,
+    // The page begins at its top, wherever the page before it was scrolled to.
+    initialOffset: 0,
     getItemKey: (index) => {
       const row = rows[index];
       return row === undefined ? index : rowKey(row);

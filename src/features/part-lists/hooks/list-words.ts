@@ -43,7 +43,7 @@ export const SEPARATOR_WORDS: Readonly<Record<PartListReading['separator'], stri
 
 export const IGNORED_WORDS: Readonly<Record<PartListReading['ignored'][number]['kind'], string>> = {
   blank: 'blank',
-  heading: 'headings',
+  heading: 'titles and headings',
   total: 'totals',
   skipped: 'left out by you',
 };

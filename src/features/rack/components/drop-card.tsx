@@ -6,7 +6,7 @@ import { paths } from '#src/lib/paths.ts';
 import { STATE_WORDS } from '#src/features/rack/hooks/state-words.ts';
 
 /** One drop as its tag: what a hand reads at the rack, the slot largest. */
-export function DropCard({ drop }: { drop: Drop }) {
+function DropCard({ drop }: { drop: Drop }) {
   const { length, ago } = useFormats();
   return (
     <Link to={paths.drop(drop.id)} className="block min-w-0">

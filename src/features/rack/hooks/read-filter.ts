@@ -1,7 +1,7 @@
 import { DROP_STATES, type DropState } from '#shared/schemas/rack.ts';
 
 /** `here`: what lies on the rack, promised to a plan or not. `all`: every drop there ever was. */
-export type StateFilter = 'here' | 'all' | DropState;
+type StateFilter = 'here' | 'all' | DropState;
 export type RackFilter = { state: StateFilter; section: string; minLengthNm: number | null; text: string };
 
 /** The filter an address asks for; what lies on the rack when it names no state. */
