@@ -2,7 +2,10 @@
 import { asNm, NM_PER_FOOT, NM_PER_M, type Nm } from '#shared/domain/units.ts';
 import type { Family } from '#shared/domain/section/types.ts';
 
-/** Floors of the trade by family (common practice, no published source); a shop sets its own. */
+/**
+ * Lengths worth tagging and finding again, by family (common practice, no published source): bars of an inch or less from 2 ft, angle,
+ * channel, pipe and tube from 3 ft, beams from 5 ft, plate from a foot square. A shop sets its own.
+ */
 const KEEP_FROM_FEET: Readonly<Record<Family, number>> = {
   angle: 3,
   flat: 2,
@@ -25,20 +28,31 @@ export const USUAL_CREDIT_PERCENT = 50;
 
 type Price = { readonly lengthNm: number; readonly costMinor: number };
 
+const METRE = BigInt(NM_PER_M);
+const least = (values: readonly bigint[]) => values.reduce((a, b) => (b < a ? b : a));
+
 /**
- * Credit a metre of a kept drop: a share of the cheapest price a metre, rounded down to whole minor units, so that no bar is ever
- * credited more than it cost. 0 when nothing has a price.
+ * Credit of a kept drop in whole minor units a metre: a share of the cheapest price a metre, rounded down, so that no bar is ever
+ * credited more than it cost. 0 when nothing has a price. Exact: a credit a hair too high would let a plan earn money by cutting.
  */
 export function creditMinorPerM(prices: readonly Price[], creditPercent: number): number {
-  const cheapest = Math.min(...prices.map(({ lengthNm, costMinor }) => costMinor / (lengthNm / NM_PER_M)));
-  return Number.isFinite(cheapest) ? Math.floor((cheapest * creditPercent) / 100) : 0;
+  if (prices.length === 0) return 0;
+  const shares = prices.map(
+    ({ lengthNm, costMinor }) =>
+      (BigInt(costMinor) * BigInt(creditPercent) * METRE) / (BigInt(lengthNm) * 100n),
+  );
+  return Number(least(shares));
 }
 
-/** Scrap credit a metre from the dealer's price for 1000 kg, never above the drop's credit: scrap must not look better than keeping. */
+/**
+ * Credit of scrap in whole minor units a metre, from the dealer's price for 1000 kg and the section's milligrams a metre; never above
+ * the drop's credit, because scrap must not look better than keeping.
+ */
 export function scrapMinorPerM(scrapMinorPerTonne: number, mgPerM: number, credit: number): number {
-  return Math.min(credit, Math.floor((scrapMinorPerTonne * mgPerM) / 1e9));
+  return Math.min(credit, Number((BigInt(scrapMinorPerTonne) * BigInt(mgPerM)) / 1_000_000_000n));
 }
 
-/** What a racked drop costs a plan: the credit it was given when it was racked. */
-export const dropCostMinor = (lengthNm: number, credit: number): number =>
-  Math.ceil((lengthNm / NM_PER_M) * credit);
+/** What a racked drop costs a plan, in whole minor units: the credit a drop of its length is given, rounded up. */
+export function dropCostMinor(lengthNm: number, credit: number): number {
+  return Number((BigInt(lengthNm) * BigInt(credit) + METRE - 1n) / METRE);
+}

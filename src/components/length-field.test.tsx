@@ -94,6 +94,16 @@ describe('LengthField', () => {
     leave();
   });
 
+  it('does not push a button away while it is being pressed', async () => {
+    render(<Form />);
+    type('nonsense');
+    fireEvent.pointerDown(screen.getByText('twenty feet'));
+    leave();
+    expect(screen.queryByRole('alert')).toBeNull();
+    fireEvent.pointerUp(screen.getByText('twenty feet'));
+    expect((await screen.findByRole('alert')).textContent).toContain('nonsense');
+  });
+
   it('takes nothing at all as zero where an allowance may be none', () => {
     render(<Form allowZero />);
     type('0');

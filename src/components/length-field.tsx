@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { formatLength, formatLengthExact, parseLength, type LengthStyle } from '#shared/domain/length.ts';
+import { afterPointer } from '#src/components/after-pointer.ts';
 import { Field, controlLook, type FieldFrame, type FieldLook } from '#src/components/field.tsx';
 
 type LengthFieldProps = FieldFrame & {
@@ -58,6 +59,7 @@ export function LengthField({
   const [text, setText] = useState(() => writeLength(value, lengthStyle));
   const [sent, setSent] = useState(value);
   const [left, setLeft] = useState(value !== null);
+  const [typed, setTyped] = useState(false);
   if (value !== sent) {
     setSent(value);
     setText(writeLength(value, lengthStyle));
@@ -68,9 +70,10 @@ export function LengthField({
   const shown = fault && left ? fault.message : fault ? undefined : error;
   const writtenBack = read && 'nm' in read ? writeLength(read.nm, lengthStyle) : null;
 
-  const type = (typed: string) => {
-    setText(typed);
-    const next = typed.trim() === '' ? null : readLength(typed, lengthStyle, allowZero);
+  const type = (written: string) => {
+    setText(written);
+    setTyped(true);
+    const next = written.trim() === '' ? null : readLength(written, lengthStyle, allowZero);
     const nm = next && 'nm' in next ? next.nm : null;
     setSent(nm);
     onChange(nm);
@@ -80,13 +83,7 @@ export function LengthField({
     <Field
       {...{ label, hideLabel, required, className }}
       error={shown}
-      hint={
-        writtenBack !== null && writtenBack !== text.trim() ? (
-          <span className="font-mono">= {writtenBack}</span>
-        ) : (
-          hint
-        )
-      }
+      hint={typed && writtenBack !== null ? <span className="font-mono">= {writtenBack}</span> : hint}
     >
       {(ids) => (
         <>
@@ -106,7 +103,7 @@ export function LengthField({
             }
             onChange={(event) => type(event.target.value)}
             onBlur={() => {
-              setLeft(true);
+              afterPointer(() => setLeft(true));
               if (writtenBack !== null) setText(writtenBack);
               onBlur?.();
             }}

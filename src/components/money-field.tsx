@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { formatMoney, minorPerUnit, parseMoney } from '#shared/domain/money.ts';
+import { afterPointer } from '#src/components/after-pointer.ts';
 import { Field, controlLook, type FieldFrame } from '#src/components/field.tsx';
 
 /** By minor units in one of the currency. */
@@ -34,6 +35,7 @@ export function MoneyField({
   const [text, setText] = useState(() => write(value));
   const [sent, setSent] = useState(value);
   const [left, setLeft] = useState(value !== null);
+  const [typed, setTyped] = useState(false);
   if (value !== sent) {
     setSent(value);
     setText(write(value));
@@ -50,13 +52,7 @@ export function MoneyField({
     <Field
       {...{ label, hideLabel, required, className }}
       error={shown}
-      hint={
-        writtenBack !== null && writtenBack !== text.trim() ? (
-          <span className="font-mono">= {writtenBack}</span>
-        ) : (
-          hint
-        )
-      }
+      hint={typed && writtenBack !== null ? <span className="font-mono">= {writtenBack}</span> : hint}
     >
       {(ids) => (
         <input
@@ -68,12 +64,13 @@ export function MoneyField({
           disabled={disabled}
           onChange={(event) => {
             setText(event.target.value);
+            setTyped(true);
             const next = event.target.value.trim() === '' ? null : parseMoney(event.target.value, currency);
             setSent(next);
             onChange(next);
           }}
           onBlur={() => {
-            setLeft(true);
+            afterPointer(() => setLeft(true));
             if (writtenBack !== null) setText(writtenBack);
             onBlur?.();
           }}

@@ -2,6 +2,7 @@ import { useId, useMemo, useState } from 'react';
 import { catalogueNames } from '#shared/domain/section/catalogue.ts';
 import { readSection } from '#shared/domain/section/read-section.ts';
 import type { SectionReading } from '#shared/domain/section/types.ts';
+import { afterPointer } from '#src/components/after-pointer.ts';
 import { Field, controlLook, type FieldFrame, type FieldLook } from '#src/components/field.tsx';
 
 type SectionFieldProps = FieldFrame & {
@@ -59,6 +60,7 @@ export function SectionField({
   const [text, setText] = useState(value ?? '');
   const [sent, setSent] = useState(value);
   const [left, setLeft] = useState(value !== null);
+  const [typed, setTyped] = useState(false);
   if (value !== sent) {
     setSent(value);
     setText(value ?? '');
@@ -69,9 +71,10 @@ export function SectionField({
   const name = reading?.outcome === 'read' ? reading.section.name : null;
   const shown = asked ? (left ? asked.message : undefined) : error;
 
-  const type = (typed: string) => {
-    setText(typed);
-    const next = read(typed, units);
+  const type = (written: string) => {
+    setText(written);
+    setTyped(true);
+    const next = read(written, units);
     const canonical = next?.outcome === 'read' ? next.section.name : null;
     setSent(canonical);
     onChange(canonical);
@@ -81,7 +84,7 @@ export function SectionField({
     <Field
       {...{ label, hideLabel, required, className }}
       error={shown}
-      hint={name !== null && name !== text.trim() ? <span className="font-mono">= {name}</span> : hint}
+      hint={typed && name !== null ? <span className="font-mono">= {name}</span> : hint}
     >
       {(ids) => (
         <>
@@ -96,7 +99,7 @@ export function SectionField({
             value={text}
             onChange={(event) => type(event.target.value)}
             onBlur={() => {
-              setLeft(true);
+              afterPointer(() => setLeft(true));
               if (name !== null) setText(name);
               onBlur?.();
             }}

@@ -85,6 +85,13 @@ describe('api', () => {
     expect(failure.message).not.toContain('<html>');
   });
 
+  it('keeps the words of a refused sign-in', async () => {
+    answering(403, { code: 'FORBIDDEN', message: 'This person no longer has access. Ask a manager.' });
+    expect((await failureOf(api.post('/auth/sign-in/email', {}, z.unknown()))).message).toBe(
+      'This person no longer has access. Ask a manager.',
+    );
+  });
+
   it('says that the server does not answer when there is no connection', async () => {
     vi.stubGlobal('fetch', () => Promise.reject(new TypeError('network')));
     expect(await failureOf(api.get('/drops', Tag))).toMatchObject({ code: 'unreachable', status: 0 });

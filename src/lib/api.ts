@@ -15,6 +15,8 @@ const Failure = z.object({
   }),
 });
 
+const Said = z.object({ message: z.string() });
+
 /** When a proxy or the sign-in library answers in its own words, the status still tells what to do. */
 const WORDS_BY_STATUS: Readonly<Record<number, { code: ErrorCode; message: string }>> = {
   401: { code: 'not-signed-in', message: 'You are not signed in any more. Sign in and try again.' },
@@ -27,11 +29,14 @@ const WORDS_BY_STATUS: Readonly<Record<number, { code: ErrorCode; message: strin
 function failureOf(status: number, body: unknown, requestId: string | null): ApiError {
   const known = Failure.safeParse(body);
   if (known.success) return new ApiError({ ...known.data.error, status });
+  const said = Said.safeParse(body);
   const words = WORDS_BY_STATUS[status] ?? {
     code: 'server-fault',
     message: 'The server could not answer. Try again in a moment; nothing you typed is lost.',
   };
-  return new ApiError({ ...words, status, requestId });
+  // The sign-in library refuses a closed person in the shop's own words.
+  const message = status === 403 && said.success ? said.data.message : words.message;
+  return new ApiError({ ...words, message, status, requestId });
 }
 
 async function readBody(response: Response): Promise<unknown> {

@@ -13,6 +13,7 @@ import { paths } from '#src/lib/paths.ts';
 import { progressWords } from '#src/lib/progress-words.ts';
 import { queryClient } from '#src/lib/query-client.ts';
 import { readId } from '#src/lib/read-id.ts';
+import { wholeNumber } from '#src/lib/whole-number.ts';
 
 export const loader = ({ params }: LoaderFunctionArgs) =>
   queryClient.ensureQueryData(partListQuery(readId(params.partListId)));
@@ -36,9 +37,9 @@ export function Component() {
           {partList.can['part-list:remove'] && (
             <DeletePartList
               partList={partList}
-              onDeleted={() => {
+              onDeleted={async () => {
                 say(`${partList.name} is deleted.`);
-                void navigate(paths.job(partList.jobId));
+                await navigate(paths.job(partList.jobId));
               }}
             />
           )}
@@ -51,11 +52,15 @@ export function Component() {
       }
     >
       <FigureRow>
-        <Figure value={partList.lines} label={partList.lines === 1 ? 'line' : 'lines'} />
-        <Figure value={partList.pieces} label={partList.pieces === 1 ? 'piece' : 'pieces'} />
+        <Figure value={wholeNumber(partList.lines)} label={partList.lines === 1 ? 'line' : 'lines'} />
+        <Figure value={wholeNumber(partList.pieces)} label={partList.pieces === 1 ? 'piece' : 'pieces'} />
         <Figure value={mass(partList.massMg)} label="of steel, nominal" />
-        <Figure value={planned} label="in plans" />
-        <Figure value={cut} label="cut" note={progressWords({ pieces: partList.pieces, planned, cut })} />
+        <Figure value={wholeNumber(planned)} label="in plans" />
+        <Figure
+          value={wholeNumber(cut)}
+          label="cut"
+          note={progressWords({ pieces: partList.pieces, planned, cut })}
+        />
       </FigureRow>
       <div className="mt-6">
         <PartListFacts partList={partList} />

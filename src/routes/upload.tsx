@@ -25,7 +25,9 @@ export function Component() {
       {person && job.can['part-list:edit'] ? (
         <Upload key={jobId} personId={person.id} jobId={jobId} />
       ) : (
-        <Notice>Detailers and managers bring in part lists. Ask one of them, or a manager for the role.</Notice>
+        <Notice>
+          Detailers and managers bring in part lists. Ask one of them, or a manager for the role.
+        </Notice>
       )}
     </Page>
   );

@@ -18,7 +18,9 @@ export function useJobWrites() {
   const refresh = () => client.invalidateQueries({ queryKey: jobsQuery.queryKey });
   return {
     save: (jobId: number | null, input: JobInput) =>
-      (jobId === null ? api.post('/jobs', input, Job) : api.put(`/jobs/${jobId}`, input, Job)).finally(refresh),
+      (jobId === null ? api.post('/jobs', input, Job) : api.put(`/jobs/${jobId}`, input, Job)).finally(
+        refresh,
+      ),
     reload: async (jobId: number) => (await client.fetchQuery({ ...jobQuery(jobId), staleTime: 0 })).job,
   };
 }

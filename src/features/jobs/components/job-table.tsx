@@ -3,6 +3,7 @@ import type { Job } from '#shared/schemas/jobs.ts';
 import { Table, type Column } from '#src/components/table.tsx';
 import { paths } from '#src/lib/paths.ts';
 import { progressWords } from '#src/lib/progress-words.ts';
+import { wholeNumber } from '#src/lib/whole-number.ts';
 
 const COLUMNS: readonly Column<Job>[] = [
   {
@@ -31,9 +32,15 @@ const COLUMNS: readonly Column<Job>[] = [
     cell: (job) => job.customer || <span className="text-muted">none</span>,
   },
   { key: 'lists', head: 'Part lists', align: 'right', mono: true, cell: (job) => job.partLists },
-  { key: 'pieces', head: 'Pieces', align: 'right', mono: true, cell: (job) => job.pieces },
-  { key: 'planned', head: 'Planned', align: 'right', mono: true, cell: (job) => job.piecesPlanned },
-  { key: 'cut', head: 'Cut', align: 'right', mono: true, cell: (job) => job.piecesCut },
+  { key: 'pieces', head: 'Pieces', align: 'right', mono: true, cell: (job) => wholeNumber(job.pieces) },
+  {
+    key: 'planned',
+    head: 'Planned',
+    align: 'right',
+    mono: true,
+    cell: (job) => wholeNumber(job.piecesPlanned),
+  },
+  { key: 'cut', head: 'Cut', align: 'right', mono: true, cell: (job) => wholeNumber(job.piecesCut) },
   {
     key: 'state',
     head: 'State',

@@ -15,7 +15,10 @@ export function Jobs({ jobs, mayEdit, onMake }: JobsProps) {
 
   if (jobs.length === 0)
     return (
-      <EmptyState title="No job yet" actions={mayEdit && <Button onClick={onMake}>Make the first job</Button>}>
+      <EmptyState
+        title="No job yet"
+        actions={mayEdit && <Button onClick={onMake}>Make the first job</Button>}
+      >
         A job holds the part lists of one order. Make it, bring in a part list as CSV or pasted from a
         spreadsheet, then plan what to buy and how to cut it.
         {!mayEdit && ' Detailers and managers make jobs.'}

@@ -49,14 +49,17 @@ export function useSavePartList(jobId: number) {
 
 export function useDeletePartList() {
   const client = useQueryClient();
-  return useMutation({
+  const remove = useMutation({
     mutationFn: (partListId: number) => api.delete(`/part-lists/${partListId}`, undefined, z.unknown()),
-    onSuccess: (_answer, partListId) => {
-      client.removeQueries({ queryKey: partListQuery(partListId).queryKey });
-      return Promise.all([
+    onSuccess: () =>
+      Promise.all([
         client.invalidateQueries({ queryKey: JOBS_KEY }),
         client.invalidateQueries({ queryKey: LINES_KEY }),
-      ]);
-    },
+      ]),
   });
+  return {
+    remove,
+    /** Once its page is left: while it still shows, the page would ask for the list again. */
+    forget: (partListId: number) => client.removeQueries({ queryKey: partListQuery(partListId).queryKey }),
+  };
 }

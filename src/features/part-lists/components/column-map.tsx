@@ -8,6 +8,8 @@ import { FIELD_WORDS, columnLetter } from '#src/features/part-lists/hooks/list-w
 
 type ColumnMapProps = {
   columns: readonly PartListColumn[];
+  /** Every column a part needs is known. */
+  complete: boolean;
   onColumn: (index: number, field: PartField | null) => void;
   /** The columns are right as they stand. */
   onConfirm: () => void;
@@ -20,7 +22,7 @@ const CHOICES = [
 const asField = (value: string): PartField | null => PART_FIELDS.find((field) => field === value) ?? null;
 
 /** What each column holds; a person has the last word, above all where the heading was not clear. */
-export function ColumnMap({ columns, onColumn, onConfirm }: ColumnMapProps) {
+export function ColumnMap({ columns, complete, onColumn, onConfirm }: ColumnMapProps) {
   const unsure = columns.filter(({ sure, samples }) => !sure && samples.length > 0);
   const table: Column<PartListColumn>[] = [
     {
@@ -69,7 +71,7 @@ export function ColumnMap({ columns, onColumn, onConfirm }: ColumnMapProps) {
   ];
   return (
     <>
-      {unsure.length > 0 && (
+      {complete && unsure.length > 0 && (
         <Notice
           className="mb-3"
           title={`Look at ${unsure.length === 1 ? 'column' : 'columns'} ${unsure.map(({ index }) => columnLetter(index)).join(', ')}`}

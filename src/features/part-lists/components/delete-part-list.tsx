@@ -6,12 +6,12 @@ import { faultWords } from '#src/lib/api-error.ts';
 import { countOf } from '#src/lib/formats.ts';
 import { useDeletePartList } from '#src/features/part-lists/api/part-lists.ts';
 
-type DeletePartListProps = { partList: PartListSummary; onDeleted: () => void };
+type DeletePartListProps = { partList: PartListSummary; onDeleted: () => Promise<void> };
 
 /** A list of which nothing is planned may go, its file too. */
 export function DeletePartList({ partList, onDeleted }: DeletePartListProps) {
   const [asking, setAsking] = useState(false);
-  const remove = useDeletePartList();
+  const { remove, forget } = useDeletePartList();
   return (
     <>
       <Button variant="danger" onClick={() => setAsking(true)}>
@@ -28,11 +28,19 @@ export function DeletePartList({ partList, onDeleted }: DeletePartListProps) {
         confirmLabel="Delete part list"
         busy={remove.isPending}
         error={remove.isError ? faultWords(remove.error).message : null}
-        onConfirm={() => remove.mutate(partList.id, { onSuccess: onDeleted })}
+        onConfirm={() =>
+          remove.mutate(partList.id, {
+            onSuccess: async () => {
+              await onDeleted();
+              forget(partList.id);
+            },
+          })
+        }
       >
         <p>
           {countOf(partList.lines, 'line', 'lines')} of job {partList.jobNumber} and the file{' '}
-          <span className="break-all">{partList.fileName}</span> are gone for good. Nothing of them is planned.
+          <span className="break-all">{partList.fileName}</span> are gone for good. Nothing of them is
+          planned.
         </p>
       </ConfirmDialog>
     </>

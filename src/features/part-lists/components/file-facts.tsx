@@ -1,6 +1,11 @@
 import { Facts, type Fact } from '#src/components/facts.tsx';
 import type { PartListReading } from '#shared/domain/part-list/types.ts';
-import { IGNORED_WORDS, SEPARATOR_WORDS, fileSize, rowNumbers } from '#src/features/part-lists/hooks/list-words.ts';
+import {
+  IGNORED_WORDS,
+  SEPARATOR_WORDS,
+  fileSize,
+  rowNumbers,
+} from '#src/features/part-lists/hooks/list-words.ts';
 import type { Source } from '#src/features/part-lists/hooks/upload-draft.ts';
 
 const KINDS = ['heading', 'total', 'blank'] as const;

@@ -1,5 +1,6 @@
 import type { PartListLine } from '#shared/domain/part-list/types.ts';
 import { useFormats } from '#src/lib/formats.ts';
+import { LineBlock } from '#src/features/part-lists/components/line-block.tsx';
 import { ReadLength } from '#src/features/part-lists/components/read-length.tsx';
 import { Remarks } from '#src/features/part-lists/components/remarks.tsx';
 import { SectionWords } from '#src/features/part-lists/components/section-words.tsx';
@@ -18,7 +19,14 @@ export function GoodLines({ lines }: { lines: readonly PartListLine[] }) {
       rowHead: true,
       cell: ({ mark }) => mark,
     },
-    { key: 'quantity', head: 'Qty', track: '4rem', align: 'right', mono: true, cell: ({ quantity }) => quantity },
+    {
+      key: 'quantity',
+      head: 'Qty',
+      track: '4rem',
+      align: 'right',
+      mono: true,
+      cell: ({ quantity }) => quantity,
+    },
     {
       key: 'section',
       head: 'Section',
@@ -69,27 +77,30 @@ export function GoodLines({ lines }: { lines: readonly PartListLine[] }) {
       rows={lines}
       rowKey={({ row }) => row}
       block={(line) => (
-        <>
-          <p className="flex items-baseline gap-3">
-            <span className="font-mono font-bold break-all">{line.mark}</span>
-            <span className="font-mono">× {line.quantity}</span>
-            <span className="ml-auto text-[0.9375rem] whitespace-nowrap text-muted">row {line.row}</span>
-          </p>
-          <p>
-            <SectionWords section={line.section} sectionText={line.sectionText} />
-            {line.grade && <span className="ml-3 font-mono">{line.grade}</span>}
-          </p>
-          <p className="flex flex-wrap gap-x-3 font-mono text-[0.9375rem]">
-            <span className="text-muted">{line.lengthText.trim()}</span>
-            <span>
-              <span aria-hidden>→ </span>
+        <LineBlock
+          mark={line.mark}
+          row={line.row}
+          size={
+            <>
+              <SectionWords section={line.section} sectionText={line.sectionText} />
+              {line.grade && <span className="ml-3 font-mono">{line.grade}</span>}
+              <Remarks remarks={line.remarks} />
+            </>
+          }
+          count={
+            <>
+              <span className="font-mono">{line.quantity}</span> {line.quantity === 1 ? 'piece' : 'pieces'} of{' '}
+              <span className="font-mono">{mass(line.pieceMassMg)}</span>
+            </>
+          }
+          length={
+            <>
+              <span className="text-muted">{line.lengthText.trim()}</span> <span aria-hidden>→ </span>
               <span className="sr-only">is read as </span>
               <ReadLength lengthNm={line.lengthNm} widthNm={line.widthNm} />
-            </span>
-            <span className="ml-auto">{mass(line.pieceMassMg)}</span>
-          </p>
-          <Remarks remarks={line.remarks} />
-        </>
+            </>
+          }
+        />
       )}
     />
   );

@@ -5,6 +5,7 @@ import { Fault } from '#src/components/fault.tsx';
 import { Figure, FigureRow } from '#src/components/figure-row.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { useFormats } from '#src/lib/formats.ts';
+import { wholeNumber } from '#src/lib/whole-number.ts';
 import { ColumnMap } from '#src/features/part-lists/components/column-map.tsx';
 import { FileFacts } from '#src/features/part-lists/components/file-facts.tsx';
 import { GoodLines } from '#src/features/part-lists/components/good-lines.tsx';
@@ -70,19 +71,32 @@ export function ListReview({
     <div className="grid gap-9">
       <section>
         <div className="flex flex-wrap items-start justify-between gap-4">
-          <FigureRow>
-            <Figure value={good + open} label={good + open === 1 ? 'row with a part' : 'rows with parts'} />
-            <Figure value={good} label={good === 1 ? 'good line' : 'good lines'} />
-            <Figure value={totals.pieces} label="pieces" />
-            <Figure value={totals.sections} label={totals.sections === 1 ? 'section' : 'sections'} />
-            <Figure value={mass(totals.massMg)} label="of steel" />
-          </FigureRow>
+          {reading.fatal ? (
+            <h2>What was found</h2>
+          ) : (
+            <FigureRow>
+              <Figure
+                value={wholeNumber(good + open)}
+                label={good + open === 1 ? 'row with a part' : 'rows with parts'}
+              />
+              <Figure value={wholeNumber(good)} label={good === 1 ? 'good line' : 'good lines'} />
+              <Figure value={wholeNumber(totals.pieces)} label="pieces" />
+              <Figure value={totals.sections} label={totals.sections === 1 ? 'section' : 'sections'} />
+              <Figure value={mass(totals.massMg)} label="of steel" />
+            </FigureRow>
+          )}
           {another}
         </div>
-        <div className="mt-6 grid gap-6 xl:grid-cols-[minmax(0,30rem)_minmax(0,1fr)]">
-          <ListUnit reading={reading} onUnit={(unit) => dispatch({ type: 'unit-chosen', unit })} />
-          <FileFacts source={source} reading={reading} />
-        </div>
+        {reading.fatal ? (
+          <div className="mt-4">
+            <FileFacts source={source} reading={reading} />
+          </div>
+        ) : (
+          <div className="mt-6 grid gap-6 xl:grid-cols-[minmax(0,30rem)_minmax(0,1fr)]">
+            <ListUnit reading={reading} onUnit={(unit) => dispatch({ type: 'unit-chosen', unit })} />
+            <FileFacts source={source} reading={reading} />
+          </div>
+        )}
       </section>
       {reading.fatal && (
         <Notice tone="fault" live title="The parts are not found yet">
@@ -107,6 +121,7 @@ export function ListReview({
         <div className="pt-1 pb-4">
           <ColumnMap
             columns={reading.columns}
+            complete={reading.fatal === null}
             onColumn={(index, field) => dispatch({ type: 'column-chosen', index, field })}
             onConfirm={() => dispatch({ type: 'columns-confirmed' })}
           />
@@ -133,13 +148,11 @@ export function ListReview({
                 {message}
               </Notice>
             ))}
-            <div className="mt-5">
-              <ProblemList
-                draft={draft}
-                dispatch={dispatch}
-                onSettled={() => setFinished((times) => times + 1)}
-              />
-            </div>
+            <ProblemList
+              draft={draft}
+              dispatch={dispatch}
+              onSettled={() => setFinished((times) => times + 1)}
+            />
           </section>
           <Section title="Save">
             <SaveList

@@ -3,7 +3,7 @@ import type { PartListReading } from '#shared/domain/part-list/types.ts';
 import { Button } from '#src/components/button.tsx';
 import { ChipField } from '#src/components/chip-field.tsx';
 import { ReadLength } from '#src/features/part-lists/components/read-length.tsx';
-import { UNIT_REASONS, UNIT_WORDS } from '#src/features/part-lists/hooks/list-words.ts';
+import { UNIT_WORDS, unitReason } from '#src/features/part-lists/hooks/list-words.ts';
 
 type ListUnitProps = { reading: PartListReading; onUnit: (unit: LengthUnit | null) => void };
 
@@ -19,7 +19,14 @@ export function ListUnit({ reading, onUnit }: ListUnitProps) {
     <section className="border-[1.5px] border-ink bg-chalk px-4 py-4 sm:px-5">
       <h2 className="text-[1.0625rem] text-muted">Lengths without a unit are</h2>
       <p className="font-head text-[2.5rem] leading-none font-semibold">{UNIT_WORDS[unit]}</p>
-      <p className="mt-2">{UNIT_REASONS[unitFrom]}</p>
+      <p className="mt-2">
+        {unitReason(reading)}
+        {unitFrom === 'given' && (
+          <Button variant="quiet" size="small" className="-my-2 underline" onClick={() => onUnit(null)}>
+            Take what the file says
+          </Button>
+        )}
+      </p>
       {proof ? (
         <p className="text-muted">
           Row {proof.row}: <span className="font-mono text-ink">{proof.lengthText.trim()}</span> is read as{' '}
@@ -37,7 +44,7 @@ export function ListUnit({ reading, onUnit }: ListUnitProps) {
           </p>
         )
       )}
-      <div className="mt-3 flex flex-wrap items-end gap-3">
+      <div className="mt-3">
         <ChipField
           label="Unit of lengths without a unit"
           hideLabel
@@ -45,11 +52,6 @@ export function ListUnit({ reading, onUnit }: ListUnitProps) {
           onChange={onUnit}
           choices={CHOICES}
         />
-        {unitFrom === 'given' && (
-          <Button variant="quiet" onClick={() => onUnit(null)}>
-            As the file says
-          </Button>
-        )}
       </div>
     </section>
   );

@@ -4,13 +4,20 @@ import { Button } from '#src/components/button.tsx';
 import { EmptyState } from '#src/components/empty-state.tsx';
 import { SearchField } from '#src/components/search-field.tsx';
 import { SelectField } from '#src/components/select-field.tsx';
-import { countOf, useFormats } from '#src/lib/formats.ts';
+import { useFormats } from '#src/lib/formats.ts';
 import { useSearch } from '#src/lib/use-search.ts';
+import { wholeNumber } from '#src/lib/whole-number.ts';
+import { LineBlock } from '#src/features/part-lists/components/line-block.tsx';
 import { ReadLength } from '#src/features/part-lists/components/read-length.tsx';
 import { Remarks } from '#src/features/part-lists/components/remarks.tsx';
 import { SectionWords } from '#src/features/part-lists/components/section-words.tsx';
 import { VirtualTable, type VirtualColumn } from '#src/features/part-lists/components/virtual-table.tsx';
-import { LINE_STATES, filterLines, readLineFilter, type LineState } from '#src/features/part-lists/hooks/filter-lines.ts';
+import {
+  LINE_STATES,
+  filterLines,
+  readLineFilter,
+  type LineState,
+} from '#src/features/part-lists/hooks/filter-lines.ts';
 
 const NO_FILTER = { section: null, mark: null, state: null };
 const STATE_WORDS: Readonly<Record<LineState, string>> = {
@@ -81,8 +88,22 @@ export function PartLines({ lines }: { lines: readonly PartLine[] }) {
       mono: true,
       cell: ({ pieceMassMg }) => mass(pieceMassMg),
     },
-    { key: 'pieces', head: 'Pieces', track: '4.5rem', align: 'right', mono: true, cell: ({ quantity }) => quantity },
-    { key: 'planned', head: 'Planned', track: '4.5rem', align: 'right', mono: true, cell: ({ planned }) => planned },
+    {
+      key: 'pieces',
+      head: 'Pieces',
+      track: '4.5rem',
+      align: 'right',
+      mono: true,
+      cell: ({ quantity }) => quantity,
+    },
+    {
+      key: 'planned',
+      head: 'Planned',
+      track: '4.5rem',
+      align: 'right',
+      mono: true,
+      cell: ({ planned }) => planned,
+    },
     { key: 'cut', head: 'Cut', track: '4rem', align: 'right', mono: true, cell: ({ cut }) => cut },
   ];
   return (
@@ -103,11 +124,14 @@ export function PartLines({ lines }: { lines: readonly PartLine[] }) {
       </div>
       <p role="status" className="mb-3 text-muted">
         {shown.length === lines.length
-          ? countOf(lines.length, 'line', 'lines')
-          : `${shown.length} of ${countOf(lines.length, 'line', 'lines')}`}
+          ? `${wholeNumber(lines.length)} ${lines.length === 1 ? 'line' : 'lines'}`
+          : `${wholeNumber(shown.length)} of ${wholeNumber(lines.length)} lines`}
       </p>
       {shown.length === 0 ? (
-        <EmptyState title="No line fits" actions={<Button onClick={() => set(NO_FILTER)}>Show all lines</Button>}>
+        <EmptyState
+          title="No line fits"
+          actions={<Button onClick={() => set(NO_FILTER)}>Show all lines</Button>}
+        >
           Take the section, the mark or the state away.
         </EmptyState>
       ) : (
@@ -117,26 +141,27 @@ export function PartLines({ lines }: { lines: readonly PartLine[] }) {
           rows={shown}
           rowKey={({ id }) => id}
           block={(line) => (
-            <>
-              <p className="flex items-baseline gap-3">
-                <span className="font-mono font-bold break-all">{line.mark}</span>
-                <span className="ml-auto text-[0.9375rem] whitespace-nowrap text-muted">row {line.row}</span>
-              </p>
-              <p>
-                <SectionWords section={line.section} sectionText={line.sectionText} />
-                {line.grade && <span className="ml-3 font-mono">{line.grade}</span>}
-              </p>
-              <p className="flex flex-wrap gap-x-3 font-mono text-[0.9375rem]">
-                <ReadLength lengthNm={line.lengthNm} widthNm={line.widthNm} />
-                <span className="ml-auto">{mass(line.pieceMassMg)}</span>
-              </p>
-              <p className="text-[0.9375rem]">
-                <span className="font-mono">{line.quantity}</span> {line.quantity === 1 ? 'piece' : 'pieces'},{' '}
-                <span className="font-mono">{line.planned}</span> planned,{' '}
-                <span className="font-mono">{line.cut}</span> cut
-              </p>
-              <Sayings line={line} />
-            </>
+            <LineBlock
+              mark={line.mark}
+              row={line.row}
+              size={
+                <>
+                  <SectionWords section={line.section} sectionText={line.sectionText} />
+                  {line.grade && <span className="ml-3 font-mono">{line.grade}</span>}
+                  <Sayings line={line} />
+                </>
+              }
+              length={<ReadLength lengthNm={line.lengthNm} widthNm={line.widthNm} />}
+              count={
+                <>
+                  <span className="font-mono">{line.quantity}</span>{' '}
+                  {line.quantity === 1 ? 'piece' : 'pieces'} of{' '}
+                  <span className="font-mono">{mass(line.pieceMassMg)}</span>,{' '}
+                  <span className="font-mono">{line.planned}</span> planned,{' '}
+                  <span className="font-mono">{line.cut}</span> cut
+                </>
+              }
+            />
           )}
         />
       )}

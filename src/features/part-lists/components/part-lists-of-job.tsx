@@ -5,6 +5,7 @@ import { Table, type Column } from '#src/components/table.tsx';
 import { useFormats } from '#src/lib/formats.ts';
 import { paths } from '#src/lib/paths.ts';
 import { progressWords } from '#src/lib/progress-words.ts';
+import { wholeNumber } from '#src/lib/whole-number.ts';
 import { jobLinesQuery } from '#src/features/part-lists/api/part-lists.ts';
 import { progressByList } from '#src/features/part-lists/hooks/list-progress.ts';
 
@@ -38,8 +39,8 @@ export function PartListsOfJob({ jobId, partLists }: PartListsOfJobProps) {
       fullLine: true,
       cell: (list) => <span className="break-all">{list.fileName}</span>,
     },
-    { key: 'lines', head: 'Lines', align: 'right', mono: true, cell: (list) => list.lines },
-    { key: 'pieces', head: 'Pieces', align: 'right', mono: true, cell: (list) => list.pieces },
+    { key: 'lines', head: 'Lines', align: 'right', mono: true, cell: (list) => wholeNumber(list.lines) },
+    { key: 'pieces', head: 'Pieces', align: 'right', mono: true, cell: (list) => wholeNumber(list.pieces) },
     { key: 'mass', head: 'Mass', align: 'right', mono: true, cell: (list) => mass(list.massMg) },
     {
       key: 'state',

@@ -34,7 +34,10 @@ function RowAsRead({ cells, wrongCells }: Pick<ProblemRow, 'cells' | 'wrongCells
             {columnLetter(index)}{' '}
           </span>
           <span
-            className={classNames('text-ink', wrongCells.includes(index) && 'border border-oxide bg-chalk px-1')}
+            className={classNames(
+              'text-ink',
+              wrongCells.includes(index) && 'border border-oxide bg-chalk px-1',
+            )}
           >
             {text || <span className="font-sans text-muted">blank</span>}
           </span>
@@ -117,12 +120,21 @@ export function ProblemCard({ row, sameRows, acts }: ProblemCardProps) {
       </div>
       <div className="flex items-start gap-2 sm:justify-end">
         {open && row.fixes.length > 0 && (
-          <Button size="small" variant="quiet" onClick={() => acts.onUnfix(row.row)} aria-label={`Undo ${name}`}>
+          <Button
+            size="small"
+            variant="quiet"
+            onClick={() => acts.onUnfix(row.row)}
+            aria-label={`Undo ${name}`}
+          >
             Undo
           </Button>
         )}
         {open ? (
-          <Button size="small" onClick={() => acts.onLeaveOut(row.row, [row.row])} aria-label={`Leave out ${name}`}>
+          <Button
+            size="small"
+            onClick={() => acts.onLeaveOut(row.row, [row.row])}
+            aria-label={`Leave out ${name}`}
+          >
             Leave out
           </Button>
         ) : (

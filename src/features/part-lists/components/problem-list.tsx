@@ -11,7 +11,11 @@ import {
   rowsBySameness,
   rowsToShow,
 } from '#src/features/part-lists/hooks/problem-rows.ts';
-import { isCurrent, type UploadDraft, type UploadEvent } from '#src/features/part-lists/hooks/upload-draft.ts';
+import {
+  isCurrent,
+  type UploadDraft,
+  type UploadEvent,
+} from '#src/features/part-lists/hooks/upload-draft.ts';
 import { ProblemCard, type ProblemActs } from '#src/features/part-lists/components/problem-card.tsx';
 
 type ProblemListProps = {
@@ -43,7 +47,8 @@ export function ProblemList({ draft, dispatch, onSettled }: ProblemListProps) {
   /** The place to type next. A cell that is still wrong keeps its place; else it goes down the file. */
   const goOn = (from: Place, mayStay: boolean) => {
     const stays =
-      mayStay && rows.some(({ row, problems }) => problems.some((p) => problemKey(row, p.column) === from.key));
+      mayStay &&
+      rows.some(({ row, problems }) => problems.some((p) => problemKey(row, p.column) === from.key));
     const next = stays ? from.key : nextProblem(rows, from);
     if (next === null) onSettled();
     else document.getElementById(next)?.focus();
@@ -81,11 +86,11 @@ export function ProblemList({ draft, dispatch, onSettled }: ProblemListProps) {
   const mostWrong = open >= MANY_ROWS && open > (open + good) * MOST_WRONG;
 
   return (
-    <section aria-busy={!current || undefined}>
+    <div aria-busy={!current || undefined} className="mt-5 empty:hidden">
       {mostWrong && (
         <Notice className="mb-4" title="Most rows fail in some way">
-          So many slips are rare. Look at the unit and the columns above first: one of them set right may settle
-          them all.
+          So many slips are rare. Look at the unit and the columns above first: one of them set right may
+          settle them all.
         </Notice>
       )}
       {rows.length > 0 && (
@@ -103,6 +108,6 @@ export function ProblemList({ draft, dispatch, onSettled }: ProblemListProps) {
           </Button>
         </div>
       )}
-    </section>
+    </div>
   );
 }

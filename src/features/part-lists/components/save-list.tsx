@@ -4,7 +4,11 @@ import { Fault } from '#src/components/fault.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { TextField } from '#src/components/text-field.tsx';
 import { ApiError, faultWords } from '#src/lib/api-error.ts';
-import { whatIsMissing, type UploadDraft, type UploadEvent } from '#src/features/part-lists/hooks/upload-draft.ts';
+import {
+  whatIsMissing,
+  type UploadDraft,
+  type UploadEvent,
+} from '#src/features/part-lists/hooks/upload-draft.ts';
 
 type SaveListProps = {
   draft: UploadDraft;
@@ -73,7 +77,6 @@ export function SaveList({ draft, dispatch, saving, error, onSave, saveButton }:
           onChange={(event) => dispatch({ type: 'revision-typed', revision: event.target.value })}
         />
       </div>
-      {error !== null && <Refusal error={error} />}
       <div className="flex flex-wrap items-center gap-x-5 gap-y-2">
         <Button
           ref={saveButton}
@@ -87,6 +90,7 @@ export function SaveList({ draft, dispatch, saving, error, onSave, saveButton }:
         </Button>
         {missing && <p className="text-muted">{missing}</p>}
       </div>
+      {error !== null && <Refusal error={error} />}
     </form>
   );
 }

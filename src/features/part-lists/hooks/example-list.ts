@@ -4,7 +4,17 @@ type Units = 'imperial' | 'metric';
 
 const HEADINGS: Readonly<Record<Units, readonly string[]>> = {
   imperial: ['Mark', 'Quantity', 'Section', 'Grade', 'Length', 'Width', 'Note', 'Finish', 'Needed by'],
-  metric: ['Mark', 'Quantity', 'Section', 'Grade', 'Length (mm)', 'Width (mm)', 'Note', 'Finish', 'Needed by'],
+  metric: [
+    'Mark',
+    'Quantity',
+    'Section',
+    'Grade',
+    'Length (mm)',
+    'Width (mm)',
+    'Note',
+    'Finish',
+    'Needed by',
+  ],
 };
 
 /** An invented stair of an invented job, in the notations a drawing carries. */

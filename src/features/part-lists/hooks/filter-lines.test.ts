@@ -2,7 +2,12 @@ import { describe, expect, it } from 'vitest';
 import type { PartLine } from '#shared/schemas/jobs.ts';
 import { filterLines, readLineFilter } from '#src/features/part-lists/hooks/filter-lines.ts';
 
-function line(mark: string, section: string, sectionText: string, counts: [number, number, number]): PartLine {
+function line(
+  mark: string,
+  section: string,
+  sectionText: string,
+  counts: [number, number, number],
+): PartLine {
   const [quantity, planned, cut] = counts;
   return { mark, section, sectionText, quantity, planned, cut } as PartLine;
 }

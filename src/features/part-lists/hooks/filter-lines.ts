@@ -2,7 +2,11 @@ import type { PartLine } from '#shared/schemas/jobs.ts';
 
 export const LINE_STATES = ['open', 'planned', 'cut'] as const;
 export type LineState = (typeof LINE_STATES)[number];
-export type LineFilter = { readonly section: string; readonly mark: string; readonly state: LineState | null };
+export type LineFilter = {
+  readonly section: string;
+  readonly mark: string;
+  readonly state: LineState | null;
+};
 
 /** Reads a filter from the address; what is not known there counts as not set. */
 export function readLineFilter(get: (key: string) => string): LineFilter {

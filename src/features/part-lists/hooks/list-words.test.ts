@@ -3,7 +3,15 @@ import { columnLetter, fileSize, rowNumbers } from '#src/features/part-lists/hoo
 
 describe('words about a file', () => {
   it('name columns as a spreadsheet does', () => {
-    expect([0, 25, 26, 51, 52, 701, 702].map(columnLetter)).toEqual(['A', 'Z', 'AA', 'AZ', 'BA', 'ZZ', 'AAA']);
+    expect([0, 25, 26, 51, 52, 701, 702].map(columnLetter)).toEqual([
+      'A',
+      'Z',
+      'AA',
+      'AZ',
+      'BA',
+      'ZZ',
+      'AAA',
+    ]);
   });
   it('shorten long rows of numbers', () => {
     expect(rowNumbers([3, 8, 21])).toBe('3, 8, 21');

@@ -26,13 +26,20 @@ export const UNIT_WORDS: Readonly<Record<LengthUnit, string>> = {
 };
 
 /** Why bare lengths are read in this unit, as a sentence. */
-export const UNIT_REASONS: Readonly<Record<PartListReading['unitFrom'], string>> = {
-  given: 'You chose it.',
-  heading: 'The headings of the list say so.',
-  cells: 'Lengths on the list that carry a unit are written so.',
-  sections: 'The sections of the list are of that system.',
-  default: 'Nothing in the file says which unit. Look at a drawing before you go on.',
-};
+export function unitReason({ unit, unitFrom }: Pick<PartListReading, 'unit' | 'unitFrom'>): string {
+  switch (unitFrom) {
+    case 'given':
+      return 'You chose it.';
+    case 'heading':
+      return 'The headings of the list say so.';
+    case 'cells':
+      return 'Lengths on the list that carry a unit are written so.';
+    case 'sections':
+      return `The sections of the list are ${unit === 'in' || unit === 'ft' ? 'US' : 'EN'} sizes.`;
+    case 'default':
+      return 'Nothing in the file says which unit. Look at a drawing before you go on.';
+  }
+}
 
 export const SEPARATOR_WORDS: Readonly<Record<PartListReading['separator'], string>> = {
   ',': 'comma',

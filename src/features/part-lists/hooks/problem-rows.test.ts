@@ -7,7 +7,12 @@ import {
   rowsBySameness,
 } from '#src/features/part-lists/hooks/problem-rows.ts';
 
-function problem(row: number, column: PartListProblem['column'], read: string, code = 'bad'): PartListProblem {
+function problem(
+  row: number,
+  column: PartListProblem['column'],
+  read: string,
+  code = 'bad',
+): PartListProblem {
   return { row, column, read, code, message: `Read ${read}.`, choices: [] };
 }
 

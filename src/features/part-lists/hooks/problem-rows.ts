@@ -87,7 +87,10 @@ export function problemKey(row: number, column: PartField | null): string {
 }
 
 /** The open problem to go to next: after this place in the file, from the top when there is none; null when all is done. */
-export function nextProblem(rows: readonly ProblemRow[], after: { row: number; key: string } | null): string | null {
+export function nextProblem(
+  rows: readonly ProblemRow[],
+  after: { row: number; key: string } | null,
+): string | null {
   const keys = rows.flatMap(({ row, problems }) =>
     problems.map(({ column }) => ({ row, key: problemKey(row, column) })),
   );
@@ -99,7 +102,10 @@ export function nextProblem(rows: readonly ProblemRow[], after: { row: number; k
 }
 
 /** Rows the page can carry at once: so many open and so many settled ones, in the order of the file. */
-export function rowsToShow(rows: readonly ProblemRow[], most: number): { shown: ProblemRow[]; hidden: number } {
+export function rowsToShow(
+  rows: readonly ProblemRow[],
+  most: number,
+): { shown: ProblemRow[]; hidden: number } {
   let open = 0;
   let settled = 0;
   const shown = rows.filter(({ state }) => (state === 'open' ? (open += 1) : (settled += 1)) <= most);

@@ -8,7 +8,8 @@ const settle = () => new Promise((done) => setTimeout(done, 0));
 
 /** A reader whose answers are given by hand, in the order they were asked for. */
 function slowReader() {
-  const asked: { kind: 'open' | 'read'; choices: PartListChoices; answer: () => void; fail: () => void }[] = [];
+  const asked: { kind: 'open' | 'read'; choices: PartListChoices; answer: () => void; fail: () => void }[] =
+    [];
   const wait = (kind: 'open' | 'read', choices: PartListChoices) =>
     new Promise<PartListReading>((resolve, reject) => {
       asked.push({

@@ -40,7 +40,14 @@ function readingWith(changes: Partial<PartListReading> = {}): PartListReading {
 }
 
 function problemAt(row: number) {
-  return { row, column: 'length' as const, read: '', code: 'length-blank', message: 'No length.', choices: [] };
+  return {
+    row,
+    column: 'length' as const,
+    read: '',
+    code: 'length-blank',
+    message: 'No length.',
+    choices: [],
+  };
 }
 
 function play(events: readonly UploadEvent[], from: UploadDraft = BLANK_DRAFT): UploadDraft {

@@ -33,7 +33,12 @@ export type UploadDraft = {
 export type UploadEvent =
   | { readonly type: 'source-chosen'; readonly source: Source }
   | { readonly type: 'source-dropped' }
-  | { readonly type: 'read'; readonly source: Source; readonly of: PartListChoices; readonly reading: PartListReading }
+  | {
+      readonly type: 'read';
+      readonly source: Source;
+      readonly of: PartListChoices;
+      readonly reading: PartListReading;
+    }
   | { readonly type: 'read-failed'; readonly source: Source; readonly message: string }
   | { readonly type: 'unit-chosen'; readonly unit: LengthUnit | null }
   | { readonly type: 'column-chosen'; readonly index: number; readonly field: PartField | null }

@@ -12,8 +12,6 @@ import { SignInForm as Schema, useSignIn, type SignInInput } from '#src/features
 function wordsOf(error: unknown): string {
   if (error instanceof ApiError && error.status === 401)
     return 'E-mail address or password is wrong. Type them again, or ask a manager for a new link.';
-  if (error instanceof ApiError && error.status === 403)
-    return 'This sign-in is closed. Ask a manager of the shop.';
   return faultWords(error).message;
 }
 
