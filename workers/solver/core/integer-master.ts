@@ -8,6 +8,8 @@ export type IntegerAnswer = {
   readonly uses: Use[] | null;
   /** The search ended by itself: nothing better than `uses` (or than `cutoff`) is in these columns. */
   readonly complete: boolean;
+  /** No plan over these columns that is better than `cutoff` costs less than this, also when the search was cut short. */
+  readonly bound: number;
 };
 
 /** Every demand exactly, no supply exceeded, cost below `cutoff` (minor units). */
@@ -56,12 +58,15 @@ export function solveInteger(highs: Highs, problem: Problem, columns: readonly C
       const complete = status === modelStatus.optimal || status === modelStatus.infeasible || status === modelStatus.objectiveBound;
       const { colValue } = model.getSolution();
       const value = model.getObjectiveValue();
-      if (status === modelStatus.infeasible || status === modelStatus.objectiveBound || colValue.length !== columns.length || !(value < cutoff)) return { uses: null, complete };
+      const dual = Number(model.info.get('mip_dual_bound'));
+      const bound = complete ? cutoff : Number.isFinite(dual) ? Math.min(dual, cutoff) : 0;
+      if (status === modelStatus.infeasible || status === modelStatus.objectiveBound || colValue.length !== columns.length || !(value < cutoff))
+        return { uses: null, complete, bound };
       const uses = columns.flatMap((column, p): Use[] => {
         const repeat = Math.round(colValue[p] ?? 0);
         return repeat > 0 ? [{ column, repeat }] : [];
       });
-      return { uses: makesExactly(problem, uses) ? uses : null, complete };
+      return { uses: makesExactly(problem, uses) ? uses : null, complete, bound };
     },
   );
 }

@@ -24,6 +24,9 @@ export type SolveHooks = {
 };
 
 const DIVES = 12;
+/** After so many dives a group with few columns left is solved whole at once. */
+const FEW_DIVES = 3;
+const FEW_COLUMNS = 3_000;
 const MOST_ENUMERATED = 40_000;
 const MOST_MASTER_COLUMNS = 4_000;
 /** Part of the limit kept back for stating the plan. */
@@ -144,14 +147,14 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
       work.dives++;
       if (uses) offer(uses, 'dive');
       tell('dive');
-      if (k === 2 && !isProven()) tryProof(relaxation, 0.25);
+      if (k === FEW_DIVES - 1 && !isProven()) tryProof(relaxation, FEW_COLUMNS, 1);
     }
-    if (!isProven() && !clock.isUp()) tryProof(relaxation, 0.6);
+    if (!isProven() && !clock.isUp()) tryProof(relaxation, MOST_ENUMERATED, 0.6);
     if (!isProven() && !clock.isUp() && placed) {
       const { columns } = trimmed(master.columns, relaxation, MOST_MASTER_COLUMNS);
       const answer = solveInteger(hooks.highs, problem, columns, (plan as Plan | null)?.cost ?? Infinity, clock.secondsLeft());
       if (answer.uses) offer(answer.uses, 'master');
-      if (!isProven() && !clock.isUp()) tryProof(relaxation, 1);
+      if (!isProven() && !clock.isUp()) tryProof(relaxation, MOST_ENUMERATED, 1);
     }
     return { problem, plan, bound, placed };
   } finally {
@@ -160,19 +163,20 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
     master.dispose();
   }
 
-  /** Enumerates what could still be better and solves it whole, within a share of the time left. */
-  function tryProof(relaxation: Relaxation, share: number): void {
+  /** Enumerates what could still be better, at most `most` columns, and solves it whole within a share of the time left. */
+  function tryProof(relaxation: Relaxation, most: number, share: number): void {
     if (!placed || !plan) return;
     const incumbent: Plan = plan;
-    const slack = incumbent.cost - Math.max(step, 0) - relaxation.bound + 1e-6;
+    const slack = incumbent.cost - step - relaxation.bound + 1e-6;
     const part = shorterClock(clock, clock.secondsLeft() * 1000 * share);
-    const all = enumerateColumns(problem, grid, relaxation.duals, relaxation.stockDuals, slack, MOST_ENUMERATED, part);
+    const all = enumerateColumns(problem, grid, relaxation.duals, relaxation.stockDuals, slack, most, part);
     if (!all) return;
     work.enumerated = Math.max(work.enumerated, all.columns.length);
-    const answer =
-      all.columns.length === 0 ? { uses: null, complete: true } : solveInteger(hooks.highs, problem, all.columns, incumbent.cost - Math.max(step * 0.5, 1e-6), part.secondsLeft());
+    if (all.columns.length === 0) return raise(incumbent.cost);
+    const cutoff = incumbent.cost - Math.max(step * 0.5, 1e-6);
+    const answer = solveInteger(hooks.highs, problem, all.columns, cutoff, part.secondsLeft());
     if (answer.uses) offer(answer.uses, 'proof');
-    if (answer.complete && plan) raise((plan as Plan).cost);
+    raise(answer.complete && plan ? (plan as Plan).cost : Math.min(answer.bound, incumbent.cost));
     tell('proof');
   }
 }
