@@ -12,7 +12,12 @@ export default defineConfig(({ isSsrBuild }) => ({
   build: isSsrBuild
     ? { outDir: 'dist/server', target: 'node20', emptyOutDir: true, rollupOptions: { input: 'server/main.ts' } }
     : { outDir: 'dist/client', target: 'es2022', emptyOutDir: true, chunkSizeWarningLimit: 1200 },
-  server: { proxy: { '/api': `http://localhost:${apiPort}`, '/healthz': `http://localhost:${apiPort}` } },
+  // The host stays as the browser sent it: the server takes writes from its own pages only.
+  server: {
+    proxy: Object.fromEntries(
+      ['/api', '/healthz'].map((path) => [path, { target: `http://localhost:${apiPort}`, changeOrigin: false }]),
+    ),
+  },
   test: {
     maxWorkers: 2,
     testTimeout: 60_000,

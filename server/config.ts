@@ -20,7 +20,7 @@ export type Config = {
 const LEVELS = ['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent'] as const;
 
 const Environment = z.object({
-  PORT: z.coerce.number('a port number').int().min(0).max(65_535).default(4310),
+  PORT: z.coerce.number('a port number').int().min(1).max(65_535).default(4310),
   DATA_DIR: z.string().min(1).default('./data'),
   DEMO: z.enum(['on', 'off'], 'on or off').optional(),
   BARWRIGHT_SECRET: z.string().min(32, 'at least 32 characters').optional(),
@@ -70,6 +70,11 @@ export function readConfig(environment: NodeJS.ProcessEnv): Config {
     const faults: string[] = production
       .filter((name) => env[name] === undefined)
       .map((name) => `${name} is missing: in production all of ${production.join(', ')} are wanted`);
+    if (
+      env.PUBLIC_URL !== undefined &&
+      !/^https:\/\/|^http:\/\/(localhost|127\.0\.0\.1)([:/]|$)/.test(env.PUBLIC_URL)
+    )
+      faults.push('PUBLIC_URL must begin with https://: the sign-in cookie travels encrypted only');
     if (env.DEMO !== 'off') faults.push('DEMO must be off in production: the demo shop has public passwords');
     if (faults.length > 0) throw new ConfigError(faults);
   }

@@ -13,12 +13,26 @@ import { initModels } from '#server/models/index.ts';
 const PRAGMAS =
   'PRAGMA busy_timeout=5000; PRAGMA journal_mode=WAL; PRAGMA synchronous=NORMAL; PRAGMA foreign_keys=ON;';
 
+/** Sequelize closes the connection of a transaction without waiting; whoever moves or copies the file must. */
+const closings = new Set<Promise<void>>();
+
 class PragmaticDatabase extends sqlite3.Database {
   constructor(file: string, mode: number, callback?: (error: Error | null) => void) {
     super(file, mode, (error) => {
       if (error) callback?.(error);
       else this.exec(PRAGMAS, (failure) => callback?.(failure));
     });
+  }
+
+  override close(callback?: (error: Error | null) => void): void {
+    const closing = new Promise<void>((done) =>
+      super.close((error) => {
+        callback?.(error);
+        done();
+      }),
+    );
+    closings.add(closing);
+    void closing.then(() => closings.delete(closing));
   }
 }
 
@@ -38,17 +52,23 @@ const namespace = {
 };
 Sequelize.useCLS(namespace);
 
-export type Database = { readonly sequelize: Sequelize; close(): Promise<void> };
+export type Database = {
+  readonly sequelize: Sequelize;
+  /** Waits for the last write, folds the journal into the one file and lets go of it. */
+  close(): Promise<void>;
+};
+
+export const DATABASE_FILE = 'barwright.sqlite';
 
 let current: Sequelize | undefined;
 let tail: Promise<unknown> = Promise.resolve();
 
-/** Opens (or makes) `barwright.sqlite` in the folder and binds the models to it. One database a process. */
+/** Opens (or makes) the database file in the folder and binds the models to it. One database a process. */
 export async function openDatabase(dataDir: string): Promise<Database> {
   mkdirSync(dataDir, { recursive: true });
   const sequelize = new Sequelize({
     dialect: 'sqlite',
-    storage: join(dataDir, 'barwright.sqlite'),
+    storage: join(dataDir, DATABASE_FILE),
     dialectModule: { ...sqlite3, Database: PragmaticDatabase },
     transactionType: Transaction.TYPES.IMMEDIATE,
     logging: false,
@@ -61,7 +81,9 @@ export async function openDatabase(dataDir: string): Promise<Database> {
     async close() {
       await tail.catch(() => undefined);
       if (current === sequelize) current = undefined;
+      await sequelize.query('PRAGMA wal_checkpoint(TRUNCATE)');
       await sequelize.close();
+      await Promise.all(closings);
     },
   };
 }

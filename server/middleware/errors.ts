@@ -1,9 +1,7 @@
-import type { ErrorRequestHandler, Request, RequestHandler } from 'express';
+import type { ErrorRequestHandler, RequestHandler } from 'express';
 import { MulterError } from 'multer';
 import { ShopError } from '#server/errors.ts';
 import { ERROR_STATUS, type ErrorBody } from '#shared/errors.ts';
-
-export const requestIdOf = (request: Request): string => String(request.id);
 
 /** What an upload or a body parser says, in the shop's words. */
 function asShopError(error: unknown): ShopError | null {
@@ -16,6 +14,12 @@ function asShopError(error: unknown): ShopError | null {
     if (error.type === 'entity.too.large')
       return new ShopError('file-too-large', 'That is too much to send at once.');
     if (error.type === 'entity.parse.failed') return new ShopError('bad-input', 'What was sent is not JSON.');
+  }
+  // What Express and its parts refuse by themselves: a broken address, an unknown encoding, a file that is not there.
+  if (error instanceof Error && 'status' in error && typeof error.status === 'number') {
+    if (error.status === 404) return new ShopError('not-found', 'There is nothing at this address.');
+    if (error.status >= 400 && error.status < 500)
+      return new ShopError('bad-input', 'The request could not be read.');
   }
   return null;
 }
@@ -33,7 +37,7 @@ export const answerErrors: ErrorRequestHandler = (error: unknown, request, respo
     known ??
     new ShopError('server-fault', 'Something went wrong on the server. Nothing was changed. Try again.');
   const body: ErrorBody = {
-    error: { code, message, requestId: requestIdOf(request), ...(issues ? { issues } : {}) },
+    error: { code, message, requestId: response.get('X-Request-Id') ?? '', ...(issues ? { issues } : {}) },
   };
   response.status(ERROR_STATUS[code]).json(body);
 };

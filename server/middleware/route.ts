@@ -1,10 +1,10 @@
 import type { Request, RequestHandler, Response } from 'express';
 import type { z } from 'zod';
 import { ShopError } from '#server/errors.ts';
+import type { Actor } from '#server/policies/actor.ts';
 import type { ErrorIssue } from '#shared/errors.ts';
-import { roleMay, type Action, type Role } from '#shared/permissions.ts';
+import { roleMay, type Action } from '#shared/permissions.ts';
 
-export type Actor = { id: string; name: string; email: string; role: Role };
 export type Allow = Action | 'signed-in' | 'anyone';
 
 type Spec<P, Q, B, A, L extends Allow> = {

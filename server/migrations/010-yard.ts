@@ -3,6 +3,8 @@ import { USUAL_CREDIT_PERCENT, usualKeepFromNm } from '#shared/domain/drop-rule.
 import { FAMILIES } from '#shared/domain/section/types.ts';
 
 const METHODS = `'shear','saw','thermal'`;
+/** The families as they were when these tables were made. */
+export const FAMILY_LIST = FAMILIES.map((family) => `'${family}'`).join(',');
 
 /** Stations, drop rules, suppliers and offers. Lengths are whole nanometres, money whole minor units. */
 export const yard: Migration = {
@@ -22,7 +24,7 @@ export const yard: Migration = {
       "version" INTEGER NOT NULL DEFAULT 1
     )`,
     `CREATE TABLE "drop_rules" (
-      "family" TEXT PRIMARY KEY NOT NULL,
+      "family" TEXT PRIMARY KEY NOT NULL CHECK ("family" IN (${FAMILY_LIST})),
       "keepFromNm" INTEGER NOT NULL CHECK ("keepFromNm" > 0),
       "creditPercent" INTEGER NOT NULL CHECK ("creditPercent" BETWEEN 0 AND 100),
       "version" INTEGER NOT NULL DEFAULT 1
@@ -47,7 +49,7 @@ export const yard: Migration = {
       "lengthNm" INTEGER NOT NULL CHECK ("lengthNm" > 0),
       "priceMinor" INTEGER NOT NULL CHECK ("priceMinor" >= 0),
       "pricedAt" TEXT NOT NULL,
-      "withdrawn" INTEGER NOT NULL DEFAULT 0,
+      "withdrawn" INTEGER NOT NULL DEFAULT 0 CHECK ("withdrawn" IN (0, 1)),
       "version" INTEGER NOT NULL DEFAULT 1
     )`,
     `CREATE INDEX "offers_stock" ON "offers" ("stockKey", "grade")`,

@@ -1,4 +1,11 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+  DataTypes,
+  Model,
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  type Sequelize,
+} from 'sequelize';
 import { optionalWhole, rowId, text, version, whole } from '#server/models/columns.ts';
 import type { Family } from '#shared/domain/section/types.ts';
 import type { LengthUnit } from '#shared/domain/units.ts';
@@ -21,6 +28,7 @@ export class PartListRow extends Model<InferAttributes<PartListRow>, InferCreati
   declare fileSha256: string;
   declare file: Buffer;
   declare fileBytes: number;
+  declare encoding: string;
   declare unit: LengthUnit;
   declare choices: string;
   declare skippedRows: CreationOptional<number>;
@@ -71,6 +79,7 @@ export function initJobs(sequelize: Sequelize): void {
       fileSha256: text(),
       file: { type: DataTypes.BLOB, allowNull: false },
       fileBytes: whole(),
+      encoding: text(),
       unit: text(),
       choices: text(),
       skippedRows: { ...whole(), defaultValue: 0 },

@@ -1,4 +1,10 @@
-import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+  Model,
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  type Sequelize,
+} from 'sequelize';
 import { optionalText, optionalWhole, rowId, text, version, whole } from '#server/models/columns.ts';
 import type { Family } from '#shared/domain/section/types.ts';
 import type { SolveOutcome } from '#shared/domain/solve.ts';
@@ -17,7 +23,10 @@ export class PlanRow extends Model<InferAttributes<PlanRow>, InferCreationAttrib
   declare version: CreationOptional<number>;
 }
 
-export class PlanGroupRow extends Model<InferAttributes<PlanGroupRow>, InferCreationAttributes<PlanGroupRow>> {
+export class PlanGroupRow extends Model<
+  InferAttributes<PlanGroupRow>,
+  InferCreationAttributes<PlanGroupRow>
+> {
   declare id: CreationOptional<number>;
   declare planId: number;
   declare position: number;
@@ -40,7 +49,10 @@ export class PlanGroupRow extends Model<InferAttributes<PlanGroupRow>, InferCrea
   declare work: string;
 }
 
-export class PlanPieceRow extends Model<InferAttributes<PlanPieceRow>, InferCreationAttributes<PlanPieceRow>> {
+export class PlanPieceRow extends Model<
+  InferAttributes<PlanPieceRow>,
+  InferCreationAttributes<PlanPieceRow>
+> {
   declare id: CreationOptional<number>;
   declare groupId: number;
   declare partLineId: number;
@@ -49,7 +61,10 @@ export class PlanPieceRow extends Model<InferAttributes<PlanPieceRow>, InferCrea
   declare reason: CreationOptional<string>;
 }
 
-export class PlanStockRow extends Model<InferAttributes<PlanStockRow>, InferCreationAttributes<PlanStockRow>> {
+export class PlanStockRow extends Model<
+  InferAttributes<PlanStockRow>,
+  InferCreationAttributes<PlanStockRow>
+> {
   declare id: CreationOptional<number>;
   declare groupId: number;
   declare position: number;
@@ -62,7 +77,10 @@ export class PlanStockRow extends Model<InferAttributes<PlanStockRow>, InferCrea
   declare supply: CreationOptional<number | null>;
 }
 
-export class PlanLayoutRow extends Model<InferAttributes<PlanLayoutRow>, InferCreationAttributes<PlanLayoutRow>> {
+export class PlanLayoutRow extends Model<
+  InferAttributes<PlanLayoutRow>,
+  InferCreationAttributes<PlanLayoutRow>
+> {
   declare id: CreationOptional<number>;
   declare groupId: number;
   declare position: number;

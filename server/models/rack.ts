@@ -1,4 +1,10 @@
-import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+  Model,
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  type Sequelize,
+} from 'sequelize';
 import { optionalText, optionalWhole, rowId, text, version, whole } from '#server/models/columns.ts';
 import type { Family } from '#shared/domain/section/types.ts';
 import type { DropState } from '#shared/schemas/rack.ts';
@@ -25,7 +31,10 @@ export class DropRow extends Model<InferAttributes<DropRow>, InferCreationAttrib
   declare version: CreationOptional<number>;
 }
 
-export class DropEventRow extends Model<InferAttributes<DropEventRow>, InferCreationAttributes<DropEventRow>> {
+export class DropEventRow extends Model<
+  InferAttributes<DropEventRow>,
+  InferCreationAttributes<DropEventRow>
+> {
   declare id: CreationOptional<number>;
   declare dropId: number;
   declare at: string;

@@ -11,10 +11,17 @@ export const presentJob = ({ job, counts }: JobWithCounts, role: Role): Job => (
   ...counts,
   createdAt: job.createdAt,
   version: job.version,
-  can: { 'job:edit': roleMay(role, 'job:edit'), 'part-list:edit': roleMay(role, 'part-list:edit'), 'plan:draft': roleMay(role, 'plan:draft') },
+  can: {
+    'job:edit': roleMay(role, 'job:edit'),
+    'part-list:edit': roleMay(role, 'part-list:edit'),
+    'plan:draft': roleMay(role, 'plan:draft'),
+  },
 });
 
-export const presentPartList = ({ list, jobNumber, uploadedBy, lines, pieces, massMg, planned }: ListWithFacts, role: Role): PartListSummary => ({
+export const presentPartList = (
+  { list, jobNumber, uploadedBy, lines, pieces, massMg, inPlans }: ListWithFacts,
+  role: Role,
+): PartListSummary => ({
   id: list.id,
   jobId: list.jobId,
   jobNumber,
@@ -33,7 +40,7 @@ export const presentPartList = ({ list, jobNumber, uploadedBy, lines, pieces, ma
   version: list.version,
   can: {
     'part-list:edit': roleMay(role, 'part-list:edit'),
-    'part-list:remove': roleMay(role, 'part-list:edit') && planned === 0,
+    'part-list:remove': roleMay(role, 'part-list:edit') && inPlans === 0,
     'plan:draft': roleMay(role, 'plan:draft'),
   },
 });

@@ -1,7 +1,9 @@
 import type { z } from 'zod';
 import type { AuditEntry, Mail, Person as PersonRow, ShopRow } from '#server/models/index.ts';
-import type { MailSummary, MailView, Person, Shop } from '#shared/schemas/people.ts';
-import type { AuditList } from '#shared/schemas/people.ts';
+import type { Actor } from '#server/policies/actor.ts';
+import type { SessionFacts } from '#server/services/session.ts';
+import { canOf } from '#shared/permissions.ts';
+import type { AuditList, MailSummary, MailView, Person, SessionView, Shop } from '#shared/schemas/people.ts';
 
 export function presentPerson({ person, state }: { person: PersonRow; state: Person['state'] }): Person {
   return {
@@ -25,6 +27,17 @@ export function presentShop(shop: ShopRow): Shop {
     handlingMassMg,
     scrapMinorPerTonne,
     version: version ?? 1,
+  };
+}
+
+export function presentSession({ shop, trial, demoSignIns }: SessionFacts, actor: Actor | null): SessionView {
+  return {
+    needsSetUp: shop === null,
+    trial,
+    demoSignIns,
+    shop: shop ? presentShop(shop) : null,
+    person: actor,
+    can: actor ? canOf(actor.role) : {},
   };
 }
 

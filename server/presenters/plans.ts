@@ -1,8 +1,12 @@
-import type { PlanFacts, PlanWhole } from '#server/services/read-plan.ts';
+import type { PlanFacts } from '#server/services/plan-facts.ts';
+import type { PlanWhole } from '#server/services/read-plan.ts';
 import { roleMay, type Role } from '#shared/permissions.ts';
 import type { PlanSummary, PlanView } from '#shared/schemas/plans.ts';
 
-export function presentPlan({ plan, netMillionths, boundMillionths, ...facts }: PlanFacts, role: Role): PlanSummary {
+export function presentPlan(
+  { plan, netMillionths, boundMillionths, ...facts }: PlanFacts,
+  role: Role,
+): PlanSummary {
   return {
     id: plan.id,
     number: plan.number,

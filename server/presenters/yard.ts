@@ -1,5 +1,5 @@
 import type { DropRuleRow, SupplierRow, StationRow } from '#server/models/index.ts';
-import type { OfferWithSupplier } from '#server/services/yard.ts';
+import type { OfferWithSupplier } from '#server/services/offers.ts';
 import { barMassMg } from '#shared/domain/mass.ts';
 import { sectionByName } from '#shared/domain/section/section-by-name.ts';
 import type { Family } from '#shared/domain/section/types.ts';
@@ -7,9 +7,19 @@ import { roleMay, type Role } from '#shared/permissions.ts';
 import type { DropRule, Offer, Station, Supplier } from '#shared/schemas/yard.ts';
 
 export function presentStation(station: StationRow, role: Role): Station {
-  const { id, name, method, kerfNm, headCropNm, tailCropNm, holdDownNm, longestStopNm, note, version } = station;
+  const { id, name, method, kerfNm, headCropNm, tailCropNm, holdDownNm, longestStopNm, note, version } =
+    station;
   return {
-    id, name, method, kerfNm, headCropNm, tailCropNm, holdDownNm, longestStopNm: longestStopNm ?? null, note, version,
+    id,
+    name,
+    method,
+    kerfNm,
+    headCropNm,
+    tailCropNm,
+    holdDownNm,
+    longestStopNm: longestStopNm ?? null,
+    note,
+    version,
     families: JSON.parse(station.families) as Family[],
     can: { 'station:edit': roleMay(role, 'station:edit') },
   };

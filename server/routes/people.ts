@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { fewTries } from '#server/middleware/few-tries.ts';
 import { route, type Route } from '#server/middleware/route.ts';
 import { presentPerson } from '#server/presenters/people.ts';
 import {
@@ -25,11 +26,12 @@ const ByPerson = z.object({ personId: PersonId });
 const ByToken = z.object({ token: z.string().min(10).max(100) });
 
 export function peopleRoutes(context: { mailer: Mailer; publicUrl: string }): Route[] {
-  const invited = ({ person, link, mailed }: Awaited<ReturnType<typeof invitePerson>>) => ({
-    person: presentPerson({ person, state: 'invited' as const }),
+  const invited = ({ person, state, link, mailed }: Awaited<ReturnType<typeof invitePerson>>) => ({
+    person: presentPerson({ person, state }),
     link,
     mailed,
   });
+  const limited = fewTries();
   return [
     route({ method: 'get', path: '/api/people', allow: 'person:read', answer: PeopleList }, async () => ({
       people: (await listPeople()).map(presentPerson),
@@ -71,6 +73,7 @@ export function peopleRoutes(context: { mailer: Mailer; publicUrl: string }): Ro
         method: 'get',
         path: '/api/invitations/:token',
         allow: 'anyone',
+        before: [limited],
         params: ByToken,
         answer: InvitationView,
       },
@@ -84,6 +87,7 @@ export function peopleRoutes(context: { mailer: Mailer; publicUrl: string }): Ro
         method: 'post',
         path: '/api/invitations/:token/accept',
         allow: 'anyone',
+        before: [limited],
         params: ByToken,
         body: AcceptInvitationInput,
       },

@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { route, type Route } from '#server/middleware/route.ts';
 import { presentDrop, presentDropView } from '#server/presenters/rack.ts';
-import { changeDrop, findDrop, listChildren, listDropEvents, listDrops, logDrop } from '#server/services/drops.ts';
+import { changeDrop, logDrop } from '#server/services/change-drop.ts';
+import { findDrop, listChildren, listDropEvents, listDrops } from '#server/services/drops.ts';
 import { roleMay, type Role } from '#shared/permissions.ts';
 import { Id } from '#shared/schemas/common.ts';
 import { DropList, DropPatch, DropState, DropView, LogDropInput } from '#shared/schemas/rack.ts';
@@ -9,7 +10,11 @@ import { DropList, DropPatch, DropState, DropView, LogDropInput } from '#shared/
 const ByDrop = z.object({ dropId: Id });
 
 async function viewDrop(dropId: number, role: Role) {
-  const [found, events, children] = await Promise.all([findDrop(dropId), listDropEvents(dropId), listChildren(dropId)]);
+  const [found, events, children] = await Promise.all([
+    findDrop(dropId),
+    listDropEvents(dropId),
+    listChildren(dropId),
+  ]);
   return presentDropView(found, events, children, role);
 }
 
@@ -32,14 +37,33 @@ export const rackRoutes: Route[] = [
       can: { 'drop:log': roleMay(actor.role, 'drop:log') },
     }),
   ),
-  route({ method: 'post', path: '/api/drops', allow: 'drop:log', body: LogDropInput, answer: DropView, status: 201 }, async ({ body, actor }) =>
-    viewDrop(await logDrop(body, actor), actor.role),
+  route(
+    {
+      method: 'post',
+      path: '/api/drops',
+      allow: 'drop:log',
+      body: LogDropInput,
+      answer: DropView,
+      status: 201,
+    },
+    async ({ body, actor }) => viewDrop(await logDrop(body, actor), actor.role),
   ),
-  route({ method: 'get', path: '/api/drops/:dropId', allow: 'drop:read', params: ByDrop, answer: DropView }, ({ params, actor }) =>
-    viewDrop(params.dropId, actor.role),
+  route(
+    { method: 'get', path: '/api/drops/:dropId', allow: 'drop:read', params: ByDrop, answer: DropView },
+    ({ params, actor }) => viewDrop(params.dropId, actor.role),
   ),
-  route({ method: 'patch', path: '/api/drops/:dropId', allow: 'drop:edit', params: ByDrop, body: DropPatch, answer: DropView }, async ({ params, body, actor }) => {
-    await changeDrop(params.dropId, body, actor);
-    return viewDrop(params.dropId, actor.role);
-  }),
+  route(
+    {
+      method: 'patch',
+      path: '/api/drops/:dropId',
+      allow: 'drop:edit',
+      params: ByDrop,
+      body: DropPatch,
+      answer: DropView,
+    },
+    async ({ params, body, actor }) => {
+      await changeDrop(params.dropId, body, actor);
+      return viewDrop(params.dropId, actor.role);
+    },
+  ),
 ];

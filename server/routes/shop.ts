@@ -1,7 +1,14 @@
 import { z } from 'zod';
 import { ShopError } from '#server/errors.ts';
+import { fewTries } from '#server/middleware/few-tries.ts';
 import { route, type Route } from '#server/middleware/route.ts';
-import { presentAudit, presentMail, presentMailText, presentShop } from '#server/presenters/people.ts';
+import {
+  presentAudit,
+  presentMail,
+  presentMailText,
+  presentSession,
+  presentShop,
+} from '#server/presenters/people.ts';
 import { listAudit } from '#server/services/audit.ts';
 import { findMail, listMail } from '#server/services/mail.ts';
 import { describeSession } from '#server/services/session.ts';
@@ -21,11 +28,18 @@ const AUDIT_PAGE = 100;
 
 export function shopRoutes({ trial }: { trial: boolean }): Route[] {
   return [
-    route({ method: 'get', path: '/api/session', allow: 'anyone', answer: SessionView }, ({ actor }) =>
-      describeSession(actor, trial),
+    route({ method: 'get', path: '/api/session', allow: 'anyone', answer: SessionView }, async ({ actor }) =>
+      presentSession(await describeSession(trial), actor),
     ),
     route(
-      { method: 'post', path: '/api/set-up', allow: 'anyone', body: SetUpInput, status: 201 },
+      {
+        method: 'post',
+        path: '/api/set-up',
+        allow: 'anyone',
+        before: [fewTries()],
+        body: SetUpInput,
+        status: 201,
+      },
       async ({ body }) => {
         await setUpShop(body);
         return undefined;

@@ -1,6 +1,6 @@
 import { Op } from 'sequelize';
 import { AuditEntry } from '#server/models/index.ts';
-import type { Actor } from '#server/middleware/route.ts';
+import type { Actor } from '#server/policies/actor.ts';
 
 /** Writes who did what to which thing, inside the running transaction: no write without its entry. */
 export async function record(

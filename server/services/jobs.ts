@@ -1,10 +1,12 @@
-import { QueryTypes, UniqueConstraintError } from 'sequelize';
+import { UniqueConstraintError } from 'sequelize';
 import { write } from '#server/database.ts';
 import { ShopError } from '#server/errors.ts';
-import type { Actor } from '#server/middleware/route.ts';
+import type { Actor } from '#server/policies/actor.ts';
 import { JobRow } from '#server/models/index.ts';
 import { expectFound, expectVersion } from '#server/policies/version.ts';
 import { record } from '#server/services/audit.ts';
+import { cutSql, plannedSql } from '#server/services/line-counts.ts';
+import { select } from '#server/services/select.ts';
 import type { JobInput } from '#shared/schemas/jobs.ts';
 
 export type JobCounts = { partLists: number; pieces: number; piecesPlanned: number; piecesCut: number };
@@ -12,27 +14,14 @@ export type JobWithCounts = { job: JobRow; counts: JobCounts };
 
 const NOTHING: JobCounts = { partLists: 0, pieces: 0, piecesPlanned: 0, piecesCut: 0 };
 
-/** Pieces of a part line standing in plans that are not withdrawn, and those of bars already cut. */
-export const PLANNED_SQL = `
-  SELECT pp."partLineId" AS "partLineId", sum(pp."quantity" - pp."unplaced") AS "planned"
-  FROM "plan_pieces" pp JOIN "plan_groups" g ON g."id" = pp."groupId" JOIN "plans" p ON p."id" = g."planId"
-  WHERE p."state" <> 'withdrawn' GROUP BY pp."partLineId"`;
-export const CUT_SQL = `
-  SELECT c."partLineId" AS "partLineId", count(*) AS "cut"
-  FROM "bars" b JOIN "plan_cuts" c ON c."layoutId" = b."layoutId"
-  WHERE b."state" = 'cut' GROUP BY c."partLineId"`;
-
 async function countsByJob(): Promise<Map<number, JobCounts>> {
-  const sequelize = JobRow.sequelize;
-  if (!sequelize) throw new Error('no database is open');
-  const rows = await sequelize.query<JobCounts & { jobId: number }>(
+  const rows = await select<JobCounts & { jobId: number }>(
     `SELECT l."jobId" AS "jobId", count(DISTINCT l."id") AS "partLists", coalesce(sum(n."quantity"), 0) AS "pieces",
-       coalesce(sum(pl."planned"), 0) AS "piecesPlanned", coalesce(sum(ct."cut"), 0) AS "piecesCut"
+       coalesce(sum(pl."count"), 0) AS "piecesPlanned", coalesce(sum(ct."count"), 0) AS "piecesCut"
      FROM "part_lists" l LEFT JOIN "part_lines" n ON n."partListId" = l."id"
-     LEFT JOIN (${PLANNED_SQL}) pl ON pl."partLineId" = n."id"
-     LEFT JOIN (${CUT_SQL}) ct ON ct."partLineId" = n."id"
+     LEFT JOIN (${plannedSql()}) pl ON pl."partLineId" = n."id"
+     LEFT JOIN (${cutSql()}) ct ON ct."partLineId" = n."id"
      GROUP BY l."jobId"`,
-    { type: QueryTypes.SELECT },
   );
   return new Map(rows.map(({ jobId, ...counts }) => [jobId, counts]));
 }
@@ -52,7 +41,9 @@ async function numbered<T>(number: string, work: () => Promise<T>): Promise<T> {
     return await work();
   } catch (error) {
     if (error instanceof UniqueConstraintError)
-      throw new ShopError('already-there', `There is already a job ${number}.`, [{ path: 'number', message: `job ${number} exists` }]);
+      throw new ShopError('already-there', `There is already a job ${number}.`, [
+        { path: 'number', message: `job ${number} exists` },
+      ]);
     throw error;
   }
 }

@@ -2,7 +2,7 @@ import { createHash, randomBytes, randomUUID } from 'node:crypto';
 import { write } from '#server/database.ts';
 import { invitationMail } from '#server/emails/invitation.ts';
 import { ShopError } from '#server/errors.ts';
-import type { Actor } from '#server/middleware/route.ts';
+import type { Actor } from '#server/policies/actor.ts';
 import { Invitation, Person, ShopRow } from '#server/models/index.ts';
 import {
   endSessions,
@@ -80,7 +80,7 @@ async function mailLink(person: Person, token: string, actor: Actor, { mailer, p
       days: LINK_DAYS,
     }),
   );
-  return { person, link, mailed };
+  return { person, state: stateOf(person, await personsWithPassword()), link, mailed };
 }
 
 /** Adds a person and sends the one-time link; the manager sees it once too. */
@@ -95,7 +95,7 @@ export async function invitePerson(input: InviteInput, actor: Actor, context: Li
   return mailLink(person, token, actor, context);
 }
 
-export async function findPerson(personId: string): Promise<Person> {
+async function findPerson(personId: string): Promise<Person> {
   const person = await Person.findByPk(personId);
   if (!person) throw new ShopError('not-found', 'There is no such person.');
   return person;
@@ -140,7 +140,10 @@ export async function changePerson(
       closed: patch.active === undefined ? person.closed : patch.active ? 0 : 1,
       updatedAt: new Date().toISOString(),
     });
-    if (person.closed === 1) await endSessions(person.id);
+    if (person.closed === 1) {
+      await endSessions(person.id);
+      await Invitation.destroy({ where: { personId: person.id, usedAt: null } });
+    }
     await record(actor, 'person:edit', `person ${person.name}`, { before, after: patch });
     return { person, state: stateOf(person, withPassword) };
   });

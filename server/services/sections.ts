@@ -1,22 +1,22 @@
-import { ShopError } from '#server/errors.ts';
+import type { ErrorIssue } from '#shared/errors.ts';
 import { readGrade } from '#shared/domain/grade.ts';
 import { PLATE_FAMILIES, type Section } from '#shared/domain/section/types.ts';
 import { readSection } from '#shared/domain/section/read-section.ts';
 
-/** The section behind what was typed, in canonical spelling; 422 with the choices when it is not clear. */
-export function sectionTyped(text: string, options: { plate?: boolean } = {}): Section {
+type TypedSection = { ok: true; section: Section } | { ok: false; issue: ErrorIssue };
+
+/** The section behind what was typed, in canonical spelling, or why it is not clear and what is near it. */
+export function findSectionTyped(text: string, options: { plate?: boolean } = {}): TypedSection {
+  const refuse = (message: string): TypedSection => ({ ok: false, issue: { path: 'section', message } });
   const reading = readSection(text, { hasQuantityColumn: true });
   if (reading.outcome === 'asked') {
-    const choices = reading.choices.length > 0 ? ` Near it: ${reading.choices.join(', ')}.` : '';
-    throw new ShopError('bad-input', `The section is not clear. ${reading.message}`, [
-      { path: 'section', message: `${reading.message}${choices}` },
-    ]);
+    const near = reading.choices.filter((choice) => !reading.message.includes(choice));
+    return refuse(near.length > 0 ? `${reading.message} Near it: ${near.join(', ')}.` : reading.message);
   }
-  if (options.plate !== true && PLATE_FAMILIES.includes(reading.section.family))
-    throw new ShopError('bad-input', 'Plate is not kept as bars.', [
-      { path: 'section', message: `${reading.section.name} is plate: give a bar section.` },
-    ]);
-  return reading.section;
+  const { section } = reading;
+  if (options.plate !== true && PLATE_FAMILIES.includes(section.family))
+    return refuse(`${section.name} is plate, which is not bought as bars here: give a bar section.`);
+  return { ok: true, section };
 }
 
 export const gradeTyped = (text: string): string => readGrade(text).grade;

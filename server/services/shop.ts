@@ -1,6 +1,6 @@
 import { write } from '#server/database.ts';
 import { ShopError } from '#server/errors.ts';
-import type { Actor } from '#server/middleware/route.ts';
+import type { Actor } from '#server/policies/actor.ts';
 import { ShopRow, type Person } from '#server/models/index.ts';
 import { passwordHash } from '#server/services/auth/passwords.ts';
 import { record } from '#server/services/audit.ts';

@@ -1,20 +1,20 @@
-/** Stations, drop rules, suppliers and offers: what a plan draws its defaults from. */
+/** Stations, drop rules and suppliers: what a plan draws its defaults from. */
 import { UniqueConstraintError } from 'sequelize';
 import { write } from '#server/database.ts';
 import { ShopError } from '#server/errors.ts';
-import type { Actor } from '#server/middleware/route.ts';
+import type { Actor } from '#server/policies/actor.ts';
 import { DropRuleRow, OfferRow, PlanRow, StationRow, SupplierRow } from '#server/models/index.ts';
 import { expectFound, expectVersion } from '#server/policies/version.ts';
 import { record } from '#server/services/audit.ts';
-import { gradeTyped, sectionTyped } from '#server/services/sections.ts';
-import type { DropRuleInput, OfferInput, StationInput, SupplierInput } from '#shared/schemas/yard.ts';
+import type { DropRuleInput, StationInput, SupplierInput } from '#shared/schemas/yard.ts';
 
 /** Turns a unique index's refusal into words. */
 async function named<T>(what: string, work: () => Promise<T>): Promise<T> {
   try {
     return await work();
   } catch (error) {
-    if (error instanceof UniqueConstraintError) throw new ShopError('already-there', `There is already a ${what}.`);
+    if (error instanceof UniqueConstraintError)
+      throw new ShopError('already-there', `There is already a ${what}.`);
     throw error;
   }
 }
@@ -25,7 +25,7 @@ export function makeStation(input: StationInput, actor: Actor | null): Promise<S
   return write(() =>
     named(`station called ${input.name}`, async () => {
       const { version: _version, families, ...details } = input;
-      const station = await StationRow.create({ ...details, families: JSON.stringify(families) });
+      const station = await StationRow.create({ ...details, families: JSON.stringify([...new Set(families)]) });
       await record(actor, 'station:make', `station ${station.name}`, input);
       return station;
     }),
@@ -38,7 +38,7 @@ export function changeStation(stationId: number, input: StationInput, actor: Act
       const station = expectFound(await StationRow.findByPk(stationId), 'station');
       expectVersion(station, input.version, `the station ${station.name}`);
       const { version: _version, families, ...details } = input;
-      await station.update({ ...details, families: JSON.stringify(families), version: station.version + 1 });
+      await station.update({ ...details, families: JSON.stringify([...new Set(families)]), version: station.version + 1 });
       await record(actor, 'station:edit', `station ${station.name}`, input);
       return station;
     }),
@@ -55,13 +55,18 @@ export function removeStation(stationId: number, actor: Actor): Promise<void> {
   });
 }
 
-export const listDropRules = (): Promise<DropRuleRow[]> => DropRuleRow.findAll({ order: [['family', 'ASC']] });
+export const listDropRules = (): Promise<DropRuleRow[]> =>
+  DropRuleRow.findAll({ order: [['family', 'ASC']] });
 
 export function changeDropRule(input: DropRuleInput, actor: Actor): Promise<DropRuleRow> {
   return write(async () => {
     const rule = expectFound(await DropRuleRow.findByPk(input.family), 'rule');
     expectVersion(rule, input.version, `the rule for ${input.family}`);
-    await rule.update({ keepFromNm: input.keepFromNm, creditPercent: input.creditPercent, version: rule.version + 1 });
+    await rule.update({
+      keepFromNm: input.keepFromNm,
+      creditPercent: input.creditPercent,
+      version: rule.version + 1,
+    });
     await record(actor, 'drop-rule:edit', `rule for ${input.family}`, input);
     return rule;
   });
@@ -100,62 +105,5 @@ export function removeSupplier(supplierId: number, actor: Actor): Promise<void> 
       throw new ShopError('wrong-state', `${supplier.name} has made offers, so the name stays.`);
     await supplier.destroy();
     await record(actor, 'supplier:remove', `supplier ${supplier.name}`, {});
-  });
-}
-
-export type OfferWithSupplier = { offer: OfferRow; supplierName: string };
-
-export async function listOffers(where: { stockKey?: string; grade?: string } = {}): Promise<OfferWithSupplier[]> {
-  const [offers, suppliers] = await Promise.all([
-    OfferRow.findAll({ where: { ...where, withdrawn: 0 }, order: [['stockKey', 'ASC'], ['grade', 'ASC'], ['lengthNm', 'ASC'], ['priceMinor', 'ASC']] }),
-    listSuppliers(),
-  ]);
-  const names = new Map(suppliers.map(({ id, name }) => [id, name]));
-  return offers.map((offer) => ({ offer, supplierName: names.get(offer.supplierId) ?? '' }));
-}
-
-async function offerDetails(input: OfferInput) {
-  const supplier = expectFound(await SupplierRow.findByPk(input.supplierId), 'supplier');
-  const section = sectionTyped(input.section);
-  return {
-    supplier,
-    details: {
-      supplierId: supplier.id,
-      section: section.name,
-      stockKey: section.stockKey,
-      grade: gradeTyped(input.grade),
-      lengthNm: input.lengthNm,
-      priceMinor: input.priceMinor,
-      pricedAt: new Date().toISOString(),
-    },
-  };
-}
-
-export function makeOffer(input: OfferInput, actor: Actor | null): Promise<OfferWithSupplier> {
-  return write(async () => {
-    const { supplier, details } = await offerDetails(input);
-    const offer = await OfferRow.create(details);
-    await record(actor, 'offer:make', `offer ${offer.section} ${offer.grade}`, details);
-    return { offer, supplierName: supplier.name };
-  });
-}
-
-export function changeOffer(offerId: number, input: OfferInput, actor: Actor): Promise<OfferWithSupplier> {
-  return write(async () => {
-    const offer = expectFound(await OfferRow.findOne({ where: { id: offerId, withdrawn: 0 } }), 'offer');
-    expectVersion(offer, input.version, 'the offer');
-    const { supplier, details } = await offerDetails(input);
-    await offer.update({ ...details, version: offer.version + 1 });
-    await record(actor, 'offer:edit', `offer ${offer.section} ${offer.grade}`, details);
-    return { offer, supplierName: supplier.name };
-  });
-}
-
-/** Offers that plans were made with stay as rows; they are no longer offered. */
-export function removeOffer(offerId: number, actor: Actor): Promise<void> {
-  return write(async () => {
-    const offer = expectFound(await OfferRow.findOne({ where: { id: offerId, withdrawn: 0 } }), 'offer');
-    await offer.update({ withdrawn: 1, version: offer.version + 1 });
-    await record(actor, 'offer:remove', `offer ${offer.section} ${offer.grade}`, {});
   });
 }

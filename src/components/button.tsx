@@ -49,6 +49,7 @@ export function Button({
   children,
   type = 'button',
   disabled,
+  onKeyDown,
   ...rest
 }: ButtonProps) {
   return (
@@ -57,6 +58,11 @@ export function Button({
       type={type}
       disabled={disabled || busy}
       aria-busy={busy || undefined}
+      onKeyDown={(event) => {
+        // A key held down is one press: nothing is cut, saved or deleted twice by a heavy thumb.
+        if (event.repeat && event.key === 'Enter') event.preventDefault();
+        onKeyDown?.(event);
+      }}
       className={look(variant, size, className)}
     >
       {icon}

@@ -40,7 +40,7 @@ export function formatHeat(heat: string | null): string {
 export type Formats = ReturnType<typeof formatsOf>;
 
 /** Formatters in the units, fractions and currency of one shop. */
-function formatsOf(shop: Pick<Shop, 'units' | 'inchDenominator' | 'currency'>) {
+export function formatsOf(shop: Pick<Shop, 'units' | 'inchDenominator' | 'currency'>) {
   const lengthStyle: LengthStyle = { units: shop.units, denominator: shop.inchDenominator };
   return {
     length: (nm: number) => formatLength(nm, lengthStyle),

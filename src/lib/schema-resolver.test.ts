@@ -44,7 +44,7 @@ describe('schemaResolver', () => {
       options,
     );
     expect(errors).toEqual({
-      kerfNm: { type: 'custom', message: 'a shear parts the bar without kerf: leave it at 0' },
+      kerfNm: { type: 'custom', message: 'A shear parts the bar without kerf: leave it at 0.' },
     });
   });
 

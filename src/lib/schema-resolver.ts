@@ -9,6 +9,11 @@ function valueAt(values: unknown, path: readonly PropertyKey[]): unknown {
   );
 }
 
+function asSentence(words: string): string {
+  const begun = words.charAt(0).toUpperCase() + words.slice(1);
+  return /[.?]$/.test(begun) ? begun : `${begun}.`;
+}
+
 type Issue = z.core.$ZodIssue;
 
 /** The checker's own words where they are ours, plain ones where they would be a programmer's. */
@@ -40,7 +45,7 @@ export function schemaResolver<Form extends FieldValues, Out extends FieldValues
     for (const issue of read.error.issues)
       errors[issue.path.join('.') || 'root'] ??= {
         type: issue.code,
-        message: plainWords(issue, valueAt(values, issue.path)),
+        message: asSentence(plainWords(issue, valueAt(values, issue.path))),
       };
     return { values: {}, errors: errors as FieldErrors<Form> };
   };

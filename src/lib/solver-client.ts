@@ -18,14 +18,18 @@ const MOST_WORKERS = 8;
 type Bench = { worker: Worker; solver: Remote<SolverWorker> };
 
 function openBench(): Bench {
-  const worker = new Worker(new URL('../../workers/solver/solver.worker.ts', import.meta.url), { type: 'module' });
+  const worker = new Worker(new URL('../../workers/solver/solver.worker.ts', import.meta.url), {
+    type: 'module',
+  });
   return { worker, solver: wrap<SolverWorker>(worker) };
 }
 
 const aborted = () => new DOMException('The planning was cancelled.', 'AbortError');
 
 /** A pool as wide as the machine: groups are solved side by side, a worker loads the solver once and is used again. */
-export function createSolverPool({ size = navigator.hardwareConcurrency || 2 }: { size?: number } = {}): SolverPool {
+export function createSolverPool({
+  size = navigator.hardwareConcurrency || 2,
+}: { size?: number } = {}): SolverPool {
   const width = Math.max(1, Math.min(MOST_WORKERS, size));
   const idle: Bench[] = [];
   const busy = new Set<Bench>();

@@ -28,6 +28,14 @@ export function PageFault() {
   if (isRouteErrorResponse(error) && error.status === 404) return <NotFound />;
   if (error instanceof ApiError && error.code === 'not-found') return <NotFound />;
   const words = faultWords(error);
+  if (error instanceof ApiError && error.code === 'not-allowed')
+    return (
+      <Page title={words.title}>
+        <EmptyState title={words.message} actions={<LinkButton to="/">To your own page</LinkButton>}>
+          A manager of the shop sees to people and their roles.
+        </EmptyState>
+      </Page>
+    );
   return (
     <Page title={words.title}>
       <Fault

@@ -6,14 +6,22 @@ import { BarMapSvg } from '#src/features/bar-map/components/bar-map-svg.tsx';
 import { barDrawing } from '#src/features/bar-map/hooks/bar-drawing.ts';
 import { planQuery } from '#src/features/plans/api/plans.ts';
 import { PrintSheets } from '#src/features/plans/components/print-sheets.tsx';
-import { makeBlocks, MARGIN, packSheets, PAPER, SHEET_FOOT, SHEET_HEAD } from '#src/features/plans/hooks/print-sheets.ts';
+import {
+  makeBlocks,
+  MARGIN,
+  packSheets,
+  PAPER,
+  SHEET_FOOT,
+  SHEET_HEAD,
+} from '#src/features/plans/hooks/print-sheets.ts';
 import { useFormats } from '#src/lib/formats.ts';
 import { paths } from '#src/lib/paths.ts';
 import { queryClient } from '#src/lib/query-client.ts';
 import { readId } from '#src/lib/read-id.ts';
 import { useSession, useShop } from '#src/lib/session.ts';
 
-export const loader = ({ params }: LoaderFunctionArgs) => queryClient.ensureQueryData(planQuery(readId(params.planId)));
+export const loader = ({ params }: LoaderFunctionArgs) =>
+  queryClient.ensureQueryData(planQuery(readId(params.planId)));
 
 /** Paper, as it will come out: no rail, sheets of the shop's size one below the other. */
 export function Component() {
@@ -29,7 +37,9 @@ function PlanPaper() {
   const [printedAt] = useState(() => formats.time(new Date().toISOString()));
   const sheets = useMemo(() => {
     const paper = PAPER[shop.paper];
-    const blocks = makeBlocks(view.groups, paper.width - MARGIN.left - MARGIN.right, (group, layout) => barDrawing(group, layout, formats, { bars: view.bars }));
+    const blocks = makeBlocks(view.groups, paper.width - MARGIN.left - MARGIN.right, (group, layout) =>
+      barDrawing(group, layout, formats, { bars: view.bars }),
+    );
     return packSheets(blocks, paper.height - MARGIN.top - MARGIN.bottom - SHEET_HEAD - SHEET_FOOT);
   }, [view, shop.paper, formats]);
   return (
@@ -51,7 +61,12 @@ function PlanPaper() {
           formats={formats}
           printedAt={printedAt}
           sheets={sheets}
-          drawingOf={(block) => <BarMapSvg map={block.map} label={`Bar map of ${block.group.section}, layout ${block.layout + 1}`} />}
+          drawingOf={(block) => (
+            <BarMapSvg
+              map={block.map}
+              label={`Bar map of ${block.group.section}, layout ${block.layout + 1}`}
+            />
+          )}
         />
       </div>
     </main>

@@ -24,8 +24,12 @@ export function Component() {
       }
     >
       {plans.length === 0 ? (
-        <EmptyState title="No plan yet" actions={mayPlan && <LinkButton to={paths.newPlan()}>Make the first plan</LinkButton>}>
-          A plan takes the open lines of one or several jobs and finds the cheapest bars and drops that make every piece.
+        <EmptyState
+          title="No plan yet"
+          actions={mayPlan && <LinkButton to={paths.newPlan()}>Make the first plan</LinkButton>}
+        >
+          A plan takes the open lines of one or several jobs and finds the cheapest bars and drops that make
+          every piece.
         </EmptyState>
       ) : (
         <PlanListTable plans={plans} />

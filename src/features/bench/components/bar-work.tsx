@@ -74,11 +74,13 @@ export function BarWork({ bar, group, layout, station, counts, cutBar, drawing, 
   return (
     <div className="grid gap-6">
       <div>
-        <p className="mb-3 font-mono text-lg md:text-xl">
-          {group.section} {group.grade} · {stock.drop ? `${formatTag(stock.drop.tag)} · ` : ''}
-          {length(stock.lengthNm)} · {mass(massMg)}
-          {(stock.drop !== null || progress.heatKnown !== null) && ` · ${formatHeat(heat)}`}
-        </p>
+        {progress.step > 0 && (
+          <p className="mb-3 font-mono text-lg md:text-xl">
+            {group.section} {group.grade} · {stock.drop ? `${formatTag(stock.drop.tag)} · ` : ''}
+            {length(stock.lengthNm)} · {mass(massMg)}
+            {` · ${formatHeat(heat)}`}
+          </p>
+        )}
         {progress.step === 0 && (
           <PullStep
             group={group}

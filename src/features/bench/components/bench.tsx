@@ -22,6 +22,13 @@ type BenchProps = {
   onNextBar: () => void;
 };
 
+/** The next bar is read from the top; the button that was pressed is gone with the last one. */
+function startOfPage(): void {
+  const main = document.getElementById('main');
+  main?.focus({ preventScroll: true });
+  main?.scrollIntoView({ block: 'start' });
+}
+
 function cutWords(bar: Bar): string {
   const made = bar.madeDrop ? ` Drop ${formatTag(bar.madeDrop.tag)} is racked in ${bar.madeDrop.slot}.` : '';
   return `Bar ${bar.number} is cut.${made}`;
@@ -57,6 +64,7 @@ export function Bench({ view, bar, station, mayCut, drawing, onNextBar }: BenchP
           drawing={drawing}
           onCut={(cut) => {
             say(cutWords(cut));
+            startOfPage();
             onNextBar();
           }}
         />

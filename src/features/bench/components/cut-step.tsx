@@ -65,7 +65,7 @@ export function CutStep({
         />
       )}
       <div className="mt-4 grid grid-cols-2 gap-3 sm:grid-cols-[2fr_1fr_1fr]">
-        <Button variant="act" size="bench" className="max-sm:col-span-2" onClick={onDone}>
+        <Button variant="act" size="bench" className="max-sm:col-span-2" autoFocus onClick={onDone}>
           {step.kind === 'piece' && !step.parts ? 'Piece done' : 'Cut done'}
         </Button>
         <Button size="bench" onClick={onBack}>

@@ -61,6 +61,7 @@ export function FinishStep({
               autoComplete="off"
               autoCapitalize="characters"
               placeholder="B-3-2"
+              autoFocus
               value={progress.slot}
               onChange={(event) => onChange({ slot: event.target.value })}
             />

@@ -27,7 +27,7 @@ export function Jobs({ jobs, mayEdit, onMake }: JobsProps) {
   return (
     <>
       <SearchField
-        label="Number, name or customer"
+        label="Find a job"
         className="mb-4 max-w-md"
         value={text}
         onSearch={(typed) => set({ text: typed })}

@@ -1,11 +1,24 @@
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import {
+  queryOptions,
+  useMutation,
+  useQueryClient,
+  type Query,
+  type QueryClient,
+} from '@tanstack/react-query';
 import { z } from 'zod';
 import { PartLineList, PartListView, type PartListUpload } from '#shared/schemas/jobs.ts';
 import { api } from '#src/lib/api.ts';
 
-/** Jobs count pieces of their lists, so they are asked for again when a list comes or goes. */
-const JOBS_KEY = ['jobs'] as const;
-const LINES_KEY = ['part-lines'] as const;
+/** Who is signed in stays as it is. */
+const ofTheShop = ({ queryKey }: Query) => queryKey[0] !== 'session';
+
+/**
+ * Jobs count pieces, plans count open lines: when a list comes or goes, what pages that are left remember is out of
+ * date. They ask anew when they are opened again.
+ */
+function forgetLeftPages(client: QueryClient): void {
+  client.removeQueries({ predicate: ofTheShop, type: 'inactive' });
+}
 
 export const partListQuery = (partListId: number) =>
   queryOptions({
@@ -16,7 +29,7 @@ export const partListQuery = (partListId: number) =>
 /** Every line of a job with what is planned and cut of it. */
 export const jobLinesQuery = (jobId: number) =>
   queryOptions({
-    queryKey: [...LINES_KEY, jobId],
+    queryKey: ['part-lines', jobId],
     queryFn: ({ signal }) => api.get(`/part-lines?jobIds=${jobId}`, PartLineList, { signal }),
   });
 
@@ -37,12 +50,10 @@ export function useSavePartList(jobId: number) {
       form.append('file', file, fileName);
       return api.upload(`/jobs/${jobId}/part-lists`, form, PartListView);
     },
-    onSuccess: (answer) => {
+    onSuccess: async (answer) => {
+      forgetLeftPages(client);
+      await client.invalidateQueries({ predicate: ofTheShop });
       client.setQueryData(partListQuery(answer.partList.id).queryKey, answer);
-      return Promise.all([
-        client.invalidateQueries({ queryKey: JOBS_KEY }),
-        client.invalidateQueries({ queryKey: LINES_KEY }),
-      ]);
     },
   });
 }
@@ -51,15 +62,11 @@ export function useDeletePartList() {
   const client = useQueryClient();
   const remove = useMutation({
     mutationFn: (partListId: number) => api.delete(`/part-lists/${partListId}`, undefined, z.unknown()),
-    onSuccess: () =>
-      Promise.all([
-        client.invalidateQueries({ queryKey: JOBS_KEY }),
-        client.invalidateQueries({ queryKey: LINES_KEY }),
-      ]),
+    onSuccess: () => forgetLeftPages(client),
   });
   return {
     remove,
-    /** Once its page is left: while it still shows, the page would ask for the list again. */
-    forget: (partListId: number) => client.removeQueries({ queryKey: partListQuery(partListId).queryKey }),
+    /** Once its page is left too: while it still shows, the page would ask for the list again. */
+    forget: () => forgetLeftPages(client),
   };
 }

@@ -32,7 +32,7 @@ export function DeletePartList({ partList, onDeleted }: DeletePartListProps) {
           remove.mutate(partList.id, {
             onSuccess: async () => {
               await onDeleted();
-              forget(partList.id);
+              forget();
             },
           })
         }

@@ -1,9 +1,9 @@
-import type { Ref } from 'react';
+import { useEffect, useRef, type Ref } from 'react';
 import { Button } from '#src/components/button.tsx';
 import { Fault } from '#src/components/fault.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { TextField } from '#src/components/text-field.tsx';
-import { ApiError, faultWords } from '#src/lib/api-error.ts';
+import { ApiError, faultWords, type FaultWords } from '#src/lib/api-error.ts';
 import {
   whatIsMissing,
   type UploadDraft,
@@ -26,19 +26,31 @@ const MOST_ISSUES = 50;
 function Refusal({ error }: { error: unknown }) {
   const words = faultWords(error);
   const issues = error instanceof ApiError ? error.issues : [];
-  if (issues.length === 0) return <Fault {...words} />;
+  const place = useRef<HTMLDivElement>(null);
+  // Said under the button that was pressed, which may stand at the very foot of the window.
+  useEffect(() => {
+    void place.current?.scrollIntoView({ block: 'nearest' });
+  }, [error]);
   return (
-    <Notice tone="fault" live title={words.title}>
-      <p>{words.message}</p>
+    <div ref={place} className="scroll-my-20">
+      {issues.length === 0 ? <Fault {...words} /> : <Issues {...words} issues={issues} />}
+    </div>
+  );
+}
+
+function Issues({ title, message, issues }: FaultWords & Pick<ApiError, 'issues'>) {
+  return (
+    <Notice tone="fault" live title={title}>
+      <p>{message}</p>
       <ul className="mt-1.5 list-none p-0">
-        {issues.slice(0, MOST_ISSUES).map(({ row, path, message }) => (
-          <li key={`${row ?? ''} ${path} ${message}`}>
-            {row ? (
+        {issues.slice(0, MOST_ISSUES).map((issue) => (
+          <li key={`${issue.row ?? ''} ${issue.path} ${issue.message}`}>
+            {issue.row ? (
               <>
-                Row <span className="font-mono font-bold">{row}</span>:{' '}
+                Row <span className="font-mono font-bold">{issue.row}</span>:{' '}
               </>
             ) : null}
-            {message}
+            {issue.message}
           </li>
         ))}
       </ul>

@@ -3,7 +3,7 @@ import { readAlong } from '#src/features/part-lists/hooks/read-along.ts';
 import { BLANK_DRAFT, uploadDraft, type UploadDraft } from '#src/features/part-lists/hooks/upload-draft.ts';
 
 /**
- * Drafts by person and job, as long as the tab is open: a session that ends in the middle of the work loses none of it.
+ * Drafts by person and job, as long as the tab is open: a sign-in that runs out in the middle of the work loses none of it.
  */
 const kept = new Map<string, UploadDraft>();
 

@@ -1,5 +1,4 @@
 import { useSuspenseInfiniteQuery } from '@tanstack/react-query';
-import { z } from 'zod';
 import { Button } from '#src/components/button.tsx';
 import { EmptyState } from '#src/components/empty-state.tsx';
 import { Fault } from '#src/components/fault.tsx';
@@ -7,31 +6,12 @@ import { Table } from '#src/components/table.tsx';
 import { faultWords } from '#src/lib/api-error.ts';
 import { useFormats } from '#src/lib/formats.ts';
 import { auditQuery } from '#src/features/shop/api/audit.ts';
-
-const Record = z
-  .string()
-  .transform((text, ctx): unknown => {
-    try {
-      return JSON.parse(text);
-    } catch {
-      ctx.addIssue({ code: 'custom', message: 'plain words' });
-      return z.NEVER;
-    }
-  })
-  .pipe(z.record(z.string(), z.unknown()));
-
-/** `priceMinor 9840 · lengthNm 6096000000`: the record's own words without its brackets. */
-function detailWords(detail: string): string {
-  const record = Record.safeParse(detail);
-  if (!record.success) return detail;
-  return Object.entries(record.data)
-    .map(([key, value]) => `${key} ${typeof value === 'string' ? value : JSON.stringify(value)}`)
-    .join(' · ');
-}
+import { auditWords } from '#src/features/shop/hooks/audit-words.ts';
 
 /** Who did what and when, newest first. */
 export function AuditList() {
-  const { time } = useFormats();
+  const formats = useFormats();
+  const { time } = formats;
   const audit = useSuspenseInfiniteQuery(auditQuery);
   const entries = audit.data.pages.flatMap((page) => page.entries);
   if (entries.length === 0)
@@ -63,7 +43,9 @@ export function AuditList() {
             head: 'Detail',
             className: 'sm:min-w-56',
             cell: (entry) => (
-              <span className="text-[0.9375rem] break-words text-muted">{detailWords(entry.detail)}</span>
+              <span className="text-[0.9375rem] break-words text-muted">
+                {auditWords(entry.detail, formats)}
+              </span>
             ),
           },
         ]}

@@ -1,16 +1,15 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { useMutation } from '@tanstack/react-query';
 import { z } from 'zod';
 import { api } from '#src/lib/api.ts';
-import { sessionQuery } from '#src/lib/session.ts';
+import { paths } from '#src/lib/paths.ts';
 
-/** Ends the session and forgets everything this browser had loaded for it. */
-export function useSignOut() {
-  const client = useQueryClient();
+/**
+ * Ends the session and loads the page afresh, so that nothing of this person stays in the browser's memory and
+ * whoever signs in next goes to their own place. `stay` keeps the address, for an invitation that waits there.
+ */
+export function useSignOut({ stay = false }: { stay?: boolean } = {}) {
   return useMutation({
     mutationFn: () => api.post('/auth/sign-out', {}, z.unknown()),
-    onSuccess: async () => {
-      await client.fetchQuery({ ...sessionQuery, staleTime: 0 });
-      client.removeQueries({ predicate: (query) => query.queryKey[0] !== 'session' });
-    },
+    onSuccess: () => window.location.assign(stay ? window.location.href : paths.signIn()),
   });
 }

@@ -4,7 +4,7 @@ import { useSignOut } from '#src/features/sign-in/api/sign-out.ts';
 
 /** An invitation opened in a browser where somebody else is at work. */
 export function WrongPerson({ signedIn, invited }: { signedIn: string; invited: string }) {
-  const signOut = useSignOut();
+  const signOut = useSignOut({ stay: true });
   return (
     <Notice
       title={`You are signed in as ${signedIn}`}
