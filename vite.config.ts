@@ -10,12 +10,20 @@ export default defineConfig(({ isSsrBuild }) => ({
   optimizeDeps: { exclude: ['highs'] },
   publicDir: false,
   build: isSsrBuild
-    ? { outDir: 'dist/server', target: 'node20', emptyOutDir: true, rollupOptions: { input: 'server/main.ts' } }
+    ? {
+        outDir: 'dist/server',
+        target: 'node20',
+        emptyOutDir: true,
+        rollupOptions: { input: 'server/main.ts' },
+      }
     : { outDir: 'dist/client', target: 'es2022', emptyOutDir: true, chunkSizeWarningLimit: 1200 },
   // The host stays as the browser sent it: the server takes writes from its own pages only.
   server: {
     proxy: Object.fromEntries(
-      ['/api', '/healthz'].map((path) => [path, { target: `http://localhost:${apiPort}`, changeOrigin: false }]),
+      ['/api', '/healthz'].map((path) => [
+        path,
+        { target: `http://localhost:${apiPort}`, changeOrigin: false },
+      ]),
     ),
   },
   test: {
@@ -33,7 +41,12 @@ export default defineConfig(({ isSsrBuild }) => ({
       },
       {
         extends: true,
-        test: { name: 'browser', include: ['tests/e2e/**/*.test.ts'], fileParallelism: false, testTimeout: 600_000 },
+        test: {
+          name: 'browser',
+          include: ['tests/e2e/**/*.test.ts'],
+          fileParallelism: false,
+          testTimeout: 600_000,
+        },
       },
     ],
   },

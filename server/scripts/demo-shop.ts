@@ -20,6 +20,7 @@ import { changeShop, findShop, setUpShop } from '#server/services/shop.ts';
 import { storePartList } from '#server/services/store-part-list.ts';
 import { defaultEdits, planRequest } from '#shared/domain/plan-request.ts';
 import type { Role } from '#shared/permissions.ts';
+import type { Bar } from '#shared/schemas/plans.ts';
 import { solveRequest } from '#workers/solver/node.ts';
 
 /** The commands of package.json run in the repository's folder. */
@@ -86,23 +87,23 @@ async function draftPlan({ name, jobId, stationId, wants }: Wanted, planner: Act
   return savePlan({ name, stationId, request, result: await solveRequest(request) }, planner);
 }
 
-/** The first bars of an issued plan are cut; new ones are of a heat read off the bar, except the last, where none was found. */
-async function cutFirstBars(planId: number, count: number, operator: Actor): Promise<void> {
+/** Cuts two new bars, of which one shows no heat, and the first drop that was pulled. */
+async function cutSomeBars(planId: number, operator: Actor): Promise<void> {
   const { groups, bars } = await findPlanWhole(planId);
-  for (const bar of bars.slice(0, count)) {
+  const isDrop = (bar: Bar) => {
     const group = groups.find(({ id }) => id === bar.groupId);
-    const layout = group?.result.layouts[bar.layout];
-    const stock = group?.stock.find(({ stockId }) => stockId === layout?.stockId);
-    await cutBar(
-      bar.id,
-      {
-        ...(stock?.source === 'new' ? { heat: bar.number === count ? null : '52A377' } : {}),
-        ...(bar.makesTag === null ? {} : { slot: 'B-3-3' }),
-        version: bar.version,
-      },
-      operator,
-    );
-  }
+    const stockId = group?.result.layouts[bar.layout]?.stockId;
+    return group?.stock.find((stock) => stock.stockId === stockId)?.source === 'drop';
+  };
+  const cut = async (bar: Bar, heat: { heat?: string | null }) => {
+    const slot = bar.makesTag === null ? {} : { slot: 'B-3-3' };
+    await cutBar(bar.id, { ...heat, ...slot, version: bar.version }, operator);
+  };
+  const [first, second] = bars.filter((bar) => !isDrop(bar));
+  const pulled = bars.find(isDrop);
+  if (first) await cut(first, { heat: '52A377' });
+  if (second) await cut(second, { heat: null });
+  if (pulled) await cut(pulled, {});
 }
 
 /** Fills an empty database. Takes a few seconds: its plans are really solved. */
@@ -153,5 +154,5 @@ export async function loadDemoShop(): Promise<void> {
     as('detailer'),
   );
   await issuePlan(issued, { stationId: station.shear, version: 1 }, as('purchaser'));
-  await cutFirstBars(issued, 3, as('operator'));
+  await cutSomeBars(issued, as('operator'));
 }

@@ -50,10 +50,10 @@ describe('the main job', () => {
   it('a newcomer brings in 300 lines, mends ten rows, plans, prints, exports and issues', async () => {
     const { page, complaints, outside, context } = await signIn('manager', 'desk');
     await page.goto('/jobs');
-    await page.getByRole('button', { name: /new job/i }).first().click();
+    await page.getByRole('button', { name: 'Make a job' }).click();
     await page.getByLabel('Number').fill('2503');
     await page.getByLabel('Name', { exact: true }).fill('Pump house platform');
-    await page.getByRole('dialog').getByRole('button', { name: /make|save|add/i }).click();
+    await page.getByRole('dialog').getByRole('button', { name: 'Make the job' }).click();
     await page.getByRole('link', { name: /bring in a part list/i }).first().click();
 
     await page.locator('input[type=file]').setInputFiles(list);

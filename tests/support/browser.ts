@@ -31,6 +31,7 @@ export async function openDevice(
 ): Promise<{ context: BrowserContext; page: Page; complaints: string[]; outside: string[] }> {
   const context = await browser.newContext({ baseURL, viewport: SIZES[size], acceptDownloads: true });
   const page = await context.newPage();
+  page.setDefaultTimeout(20_000);
   const complaints: string[] = [];
   const outside: string[] = [];
   page.on('pageerror', (error) => complaints.push(error.message));

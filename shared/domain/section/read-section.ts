@@ -42,7 +42,7 @@ export function readSection(text: string, context: SectionContext = {}): Section
     return asked(
       'section-fraction',
       `"${improper}" in "${text.trim()}" is ${Number(n) / Number(d)} or a fraction that lost its space. Type it with a dash, such as 1-1/2.`,
-      lostSpace.map((fraction) => plain.replace(improper, fraction)),
+      lostSpace.map((fraction) => plain.replace(improper, fraction).replace(/(?<=\d)X(?=[\d.])/g, 'x')),
     );
   }
   const { kind, sizes, rest, notes } = takeWords(plain);

@@ -58,7 +58,7 @@ export function usePlanWrites() {
     async remove(planId: number): Promise<void> {
       await api.delete(`/plans/${planId}`, undefined, z.undefined());
       client.removeQueries({ queryKey: planQuery(planId).queryKey });
-      await client.invalidateQueries({ queryKey: plansQuery.queryKey });
+      await client.invalidateQueries({ predicate: ({ queryKey }) => queryKey[0] !== 'session' });
     },
   };
 }
