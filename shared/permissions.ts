@@ -43,5 +43,8 @@ export function roleMay(role: Role, action: Action): boolean {
 
 /** Every action with yes or no for one role, as sent with the session. */
 export function canOf(role: Role): Record<Action, boolean> {
-  return Object.fromEntries(ACTIONS.map((action) => [action, roleMay(role, action)])) as Record<Action, boolean>;
+  return Object.fromEntries(ACTIONS.map((action) => [action, roleMay(role, action)])) as Record<
+    Action,
+    boolean
+  >;
 }

@@ -23,7 +23,7 @@ import {
 const MOST_DETAILS_BYTES = 8 * 1024 * 1024;
 const upload = multer({
   storage: multer.memoryStorage(),
-  limits: { fileSize: MOST_FILE_BYTES, files: 1, fieldSize: 8 * 1024 * 1024, fields: 4, fieldSize: MOST_DETAILS_BYTES },
+  limits: { fileSize: MOST_FILE_BYTES, files: 1, fields: 4, fieldSize: MOST_DETAILS_BYTES },
   defParamCharset: 'utf8',
 });
 

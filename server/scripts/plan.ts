@@ -24,7 +24,8 @@ function readRequest(path: string | undefined, rest: readonly string[]): SolveRe
     refuse([`${path} is not JSON: ${error instanceof Error ? error.message : String(error)}`]);
   }
   const parsed = SolveRequest.safeParse(json);
-  if (!parsed.success) refuse(parsed.error.issues.map(({ path: at, message }) => `${at.join('.') || 'request'}: ${message}`));
+  if (!parsed.success)
+    refuse(parsed.error.issues.map(({ path: at, message }) => `${at.join('.') || 'request'}: ${message}`));
   const makers = findMoneyMakers(parsed.data);
   if (makers.length > 0) refuse(makers.map(({ path: at, message }) => `${at}: ${message}`));
   return parsed.data;
@@ -33,10 +34,15 @@ function readRequest(path: string | undefined, rest: readonly string[]): SolveRe
 const [path, ...rest] = process.argv.slice(2);
 const request = readRequest(path, rest);
 let lastTold = -Infinity;
-const result = await solveRequest(request, ({ groupId, phase, netCostMinor, boundMinor, bars, elapsedMs }) => {
-  const now = performance.now();
-  if (phase !== 'done' && now - lastTold < 200) return;
-  lastTold = now;
-  process.stderr.write(`${groupId}: ${phase}, net ${netCostMinor?.toFixed(2) ?? '–'}, bound ${boundMinor?.toFixed(2) ?? '–'}, ${bars ?? 0} bars, ${Math.round(elapsedMs)} ms\n`);
-});
+const result = await solveRequest(
+  request,
+  ({ groupId, phase, netCostMinor, boundMinor, bars, elapsedMs }) => {
+    const now = performance.now();
+    if (phase !== 'done' && now - lastTold < 200) return;
+    lastTold = now;
+    process.stderr.write(
+      `${groupId}: ${phase}, net ${netCostMinor?.toFixed(2) ?? '–'}, bound ${boundMinor?.toFixed(2) ?? '–'}, ${bars ?? 0} bars, ${Math.round(elapsedMs)} ms\n`,
+    );
+  },
+);
 process.stdout.write(`${JSON.stringify(result, null, 2)}\n`);

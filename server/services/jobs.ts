@@ -1,11 +1,10 @@
-import { UniqueConstraintError } from 'sequelize';
 import { write } from '#server/database.ts';
-import { ShopError } from '#server/errors.ts';
 import type { Actor } from '#server/policies/actor.ts';
 import { JobRow } from '#server/models/index.ts';
 import { expectFound, expectVersion } from '#server/policies/version.ts';
 import { record } from '#server/services/audit.ts';
 import { cutSql, plannedSql } from '#server/services/line-counts.ts';
+import { refuseTwin } from '#server/services/refuse-twin.ts';
 import { select } from '#server/services/select.ts';
 import type { JobInput } from '#shared/schemas/jobs.ts';
 
@@ -36,17 +35,12 @@ export async function findJob(jobId: number): Promise<JobWithCounts> {
   return { job: expectFound(job, 'job'), counts: counts.get(jobId) ?? NOTHING };
 }
 
-async function numbered<T>(number: string, work: () => Promise<T>): Promise<T> {
-  try {
-    return await work();
-  } catch (error) {
-    if (error instanceof UniqueConstraintError)
-      throw new ShopError('already-there', `There is already a job ${number}.`, [
-        { path: 'number', message: `job ${number} exists` },
-      ]);
-    throw error;
-  }
-}
+const numbered = <T>(number: string, work: () => Promise<T>): Promise<T> =>
+  refuseTwin(
+    `There is already a job ${number}.`,
+    [{ path: 'number', message: `job ${number} exists already` }],
+    work,
+  );
 
 export function makeJob(input: JobInput, actor: Actor | null): Promise<JobWithCounts> {
   return write(() =>

@@ -1,31 +1,30 @@
 /** Stations, drop rules and suppliers: what a plan draws its defaults from. */
-import { UniqueConstraintError } from 'sequelize';
 import { write } from '#server/database.ts';
 import { ShopError } from '#server/errors.ts';
 import type { Actor } from '#server/policies/actor.ts';
 import { DropRuleRow, OfferRow, PlanRow, StationRow, SupplierRow } from '#server/models/index.ts';
 import { expectFound, expectVersion } from '#server/policies/version.ts';
 import { record } from '#server/services/audit.ts';
+import { refuseTwin } from '#server/services/refuse-twin.ts';
 import type { DropRuleInput, StationInput, SupplierInput } from '#shared/schemas/yard.ts';
 
-/** Turns a unique index's refusal into words. */
-async function named<T>(what: string, work: () => Promise<T>): Promise<T> {
-  try {
-    return await work();
-  } catch (error) {
-    if (error instanceof UniqueConstraintError)
-      throw new ShopError('already-there', `There is already a ${what}.`);
-    throw error;
-  }
-}
+const named = <T>(what: string, name: string, work: () => Promise<T>): Promise<T> =>
+  refuseTwin(
+    `There is already a ${what} called ${name}.`,
+    [{ path: 'name', message: `${name} is taken` }],
+    work,
+  );
 
 export const listStations = (): Promise<StationRow[]> => StationRow.findAll({ order: [['name', 'ASC']] });
 
 export function makeStation(input: StationInput, actor: Actor | null): Promise<StationRow> {
   return write(() =>
-    named(`station called ${input.name}`, async () => {
+    named('station', input.name, async () => {
       const { version: _version, families, ...details } = input;
-      const station = await StationRow.create({ ...details, families: JSON.stringify([...new Set(families)]) });
+      const station = await StationRow.create({
+        ...details,
+        families: JSON.stringify([...new Set(families)]),
+      });
       await record(actor, 'station:make', `station ${station.name}`, input);
       return station;
     }),
@@ -34,11 +33,15 @@ export function makeStation(input: StationInput, actor: Actor | null): Promise<S
 
 export function changeStation(stationId: number, input: StationInput, actor: Actor): Promise<StationRow> {
   return write(() =>
-    named(`station called ${input.name}`, async () => {
+    named('station', input.name, async () => {
       const station = expectFound(await StationRow.findByPk(stationId), 'station');
       expectVersion(station, input.version, `the station ${station.name}`);
       const { version: _version, families, ...details } = input;
-      await station.update({ ...details, families: JSON.stringify([...new Set(families)]), version: station.version + 1 });
+      await station.update({
+        ...details,
+        families: JSON.stringify([...new Set(families)]),
+        version: station.version + 1,
+      });
       await record(actor, 'station:edit', `station ${station.name}`, input);
       return station;
     }),
@@ -76,7 +79,7 @@ export const listSuppliers = (): Promise<SupplierRow[]> => SupplierRow.findAll({
 
 export function makeSupplier(input: SupplierInput, actor: Actor | null): Promise<SupplierRow> {
   return write(() =>
-    named(`supplier called ${input.name}`, async () => {
+    named('supplier', input.name, async () => {
       const { version: _version, ...details } = input;
       const supplier = await SupplierRow.create(details);
       await record(actor, 'supplier:make', `supplier ${supplier.name}`, details);
@@ -87,7 +90,7 @@ export function makeSupplier(input: SupplierInput, actor: Actor | null): Promise
 
 export function changeSupplier(supplierId: number, input: SupplierInput, actor: Actor): Promise<SupplierRow> {
   return write(() =>
-    named(`supplier called ${input.name}`, async () => {
+    named('supplier', input.name, async () => {
       const supplier = expectFound(await SupplierRow.findByPk(supplierId), 'supplier');
       const { version, ...details } = input;
       expectVersion(supplier, version, `the supplier ${supplier.name}`);

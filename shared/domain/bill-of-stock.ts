@@ -38,7 +38,16 @@ export type Ledger = {
   readonly scrap: number;
 };
 
-export const NO_LENGTH: Ledger = { stock: 0, bought: 0, fromRack: 0, pieces: 0, crops: 0, kerf: 0, drops: 0, scrap: 0 };
+export const NO_LENGTH: Ledger = {
+  stock: 0,
+  bought: 0,
+  fromRack: 0,
+  pieces: 0,
+  crops: 0,
+  kerf: 0,
+  drops: 0,
+  scrap: 0,
+};
 
 const add = (a: Ledger, b: Ledger): Ledger => ({
   stock: a.stock + b.stock,
@@ -70,7 +79,16 @@ export function ledgerOf({ request, result }: Pick<BillGroup, 'request' | 'resul
       scrap: layout.keeps ? 0 : layout.leftoverNm,
     };
     const times = (nm: number) => nm * layout.repeat;
-    return add(sum, { stock: times(one.stock), bought: times(one.bought), fromRack: times(one.fromRack), pieces: times(one.pieces), crops: times(one.crops), kerf: times(one.kerf), drops: times(one.drops), scrap: times(one.scrap) });
+    return add(sum, {
+      stock: times(one.stock),
+      bought: times(one.bought),
+      fromRack: times(one.fromRack),
+      pieces: times(one.pieces),
+      crops: times(one.crops),
+      kerf: times(one.kerf),
+      drops: times(one.drops),
+      scrap: times(one.scrap),
+    });
   }, NO_LENGTH);
 }
 
@@ -78,19 +96,44 @@ export function ledgerOf({ request, result }: Pick<BillGroup, 'request' | 'resul
 export function billOf(groups: readonly BillGroup[]): BillLine[] {
   return groups.flatMap(({ id, section, grade, mgPerM, request, result }) =>
     request.stock.flatMap((stock): BillLine[] => {
-      const bars = result.layouts.filter(({ stockId }) => stockId === stock.id).reduce((sum, { repeat }) => sum + repeat, 0);
+      const bars = result.layouts
+        .filter(({ stockId }) => stockId === stock.id)
+        .reduce((sum, { repeat }) => sum + repeat, 0);
       if (bars === 0) return [];
-      return [{ groupId: id, section, grade, stockId: stock.id, source: stock.source, lengthNm: stock.lengthNm, bars, massMg: bars * barMassMg(mgPerM, stock.lengthNm), costMinor: bars * stock.costMinor }];
+      return [
+        {
+          groupId: id,
+          section,
+          grade,
+          stockId: stock.id,
+          source: stock.source,
+          lengthNm: stock.lengthNm,
+          bars,
+          massMg: bars * barMassMg(mgPerM, stock.lengthNm),
+          costMinor: bars * stock.costMinor,
+        },
+      ];
     }),
   );
 }
 
 /** Masses of the whole plan in milligrams, and the share of it that becomes pieces. Yield null without any bar. */
-export function massesOf(groups: readonly BillGroup[]): { readonly [K in keyof Ledger]: number } & { readonly yield: number | null } {
+export function massesOf(
+  groups: readonly BillGroup[],
+): { readonly [K in keyof Ledger]: number } & { readonly yield: number | null } {
   const total = groups.reduce((sum, group) => {
     const ledger = ledgerOf(group);
     const mass = (nm: number) => barMassMg(group.mgPerM, nm);
-    return add(sum, { stock: mass(ledger.stock), bought: mass(ledger.bought), fromRack: mass(ledger.fromRack), pieces: mass(ledger.pieces), crops: mass(ledger.crops), kerf: mass(ledger.kerf), drops: mass(ledger.drops), scrap: mass(ledger.scrap) });
+    return add(sum, {
+      stock: mass(ledger.stock),
+      bought: mass(ledger.bought),
+      fromRack: mass(ledger.fromRack),
+      pieces: mass(ledger.pieces),
+      crops: mass(ledger.crops),
+      kerf: mass(ledger.kerf),
+      drops: mass(ledger.drops),
+      scrap: mass(ledger.scrap),
+    });
   }, NO_LENGTH);
   return { ...total, yield: total.stock > 0 ? total.pieces / total.stock : null };
 }

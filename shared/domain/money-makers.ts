@@ -8,15 +8,25 @@ import type { PlanFault } from '#shared/domain/check-plan.ts';
  */
 export function findMoneyMakers(request: SolveRequest): PlanFault[] {
   return request.groups.flatMap((group, g) => {
-    const shortest = Math.min(...group.pieces.filter(({ quantity }) => quantity > 0).map(({ lengthNm }) => lengthNm));
+    const shortest = Math.min(
+      ...group.pieces.filter(({ quantity }) => quantity > 0).map(({ lengthNm }) => lengthNm),
+    );
     if (!Number.isFinite(shortest)) return [];
     return group.stock.flatMap((stock, s) => {
       const usable = usableNm(stock.lengthNm, group.cutting);
       if (stock.supply === 0 || !fits(usable, shortest, 1, group.cutting)) return [];
       const left = leftoverNm(usable, shortest, 1, group.cutting);
-      const credit = Math.max(creditMinor(left, group.drops), (group.drops.scrapMinorPerM * Math.min(left, group.drops.keepFromNm)) / 1e9);
+      const credit = Math.max(
+        creditMinor(left, group.drops),
+        (group.drops.scrapMinorPerM * Math.min(left, group.drops.keepFromNm)) / 1e9,
+      );
       return credit > stock.costMinor
-        ? [{ path: `groups.${g}.stock.${s}.costMinor`, message: `${stock.id} costs ${stock.costMinor} and its leftover would be credited with ${credit.toFixed(2)}: lower the credit or raise the cost` }]
+        ? [
+            {
+              path: `groups.${g}.stock.${s}.costMinor`,
+              message: `${stock.id} costs ${stock.costMinor} and its leftover would be credited with ${credit.toFixed(2)}: lower the credit or raise the cost`,
+            },
+          ]
         : [];
     });
   });

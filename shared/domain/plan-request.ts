@@ -1,11 +1,27 @@
 /** From the shop's defaults and the planner's edits to a solve request; pure, so that the page and the demo shop ask alike. */
-import type { SolveCutting, SolveDropRule, SolveGroup, SolveRequest, SolveStock } from '#shared/domain/solve.ts';
+import type {
+  SolveCutting,
+  SolveDropRule,
+  SolveGroup,
+  SolveRequest,
+  SolveStock,
+} from '#shared/domain/solve.ts';
 
 /** What the planner may tick and change for one group. Keys are stock ids; lengths typed by hand have ids `length:<n>`. */
 export type GroupEdits = {
   readonly leftOut: boolean;
-  readonly stock: readonly { readonly stockId: string; readonly lengthNm: number; readonly costMinor: number; readonly used: boolean }[];
-  readonly drops: readonly { readonly stockId: string; readonly lengthNm: number; readonly costMinor: number; readonly used: boolean }[];
+  readonly stock: readonly {
+    readonly stockId: string;
+    readonly lengthNm: number;
+    readonly costMinor: number;
+    readonly used: boolean;
+  }[];
+  readonly drops: readonly {
+    readonly stockId: string;
+    readonly lengthNm: number;
+    readonly costMinor: number;
+    readonly used: boolean;
+  }[];
   readonly cutting: SolveCutting;
   readonly rule: SolveDropRule;
 };
@@ -14,9 +30,22 @@ export type PlanEdits = Readonly<Record<string, GroupEdits>>;
 /** As much of the planning answer as a request needs. */
 export type PlanningGroup = {
   readonly id: string;
-  readonly pieces: readonly { readonly id: string; readonly mark: string; readonly lengthNm: number; readonly quantity: number }[];
-  readonly offers: readonly { readonly stockId: string; readonly lengthNm: number; readonly costMinor: number }[];
-  readonly drops: readonly { readonly stockId: string; readonly lengthNm: number; readonly costMinor: number }[];
+  readonly pieces: readonly {
+    readonly id: string;
+    readonly mark: string;
+    readonly lengthNm: number;
+    readonly quantity: number;
+  }[];
+  readonly offers: readonly {
+    readonly stockId: string;
+    readonly lengthNm: number;
+    readonly costMinor: number;
+  }[];
+  readonly drops: readonly {
+    readonly stockId: string;
+    readonly lengthNm: number;
+    readonly costMinor: number;
+  }[];
   readonly cutting: SolveCutting;
   readonly rule: SolveDropRule;
 };
@@ -28,8 +57,18 @@ export function defaultEdits(view: { readonly groups: readonly PlanningGroup[] }
       group.id,
       {
         leftOut: false,
-        stock: group.offers.map(({ stockId, lengthNm, costMinor }) => ({ stockId, lengthNm, costMinor, used: true })),
-        drops: group.drops.map(({ stockId, lengthNm, costMinor }) => ({ stockId, lengthNm, costMinor, used: true })),
+        stock: group.offers.map(({ stockId, lengthNm, costMinor }) => ({
+          stockId,
+          lengthNm,
+          costMinor,
+          used: true,
+        })),
+        drops: group.drops.map(({ stockId, lengthNm, costMinor }) => ({
+          stockId,
+          lengthNm,
+          costMinor,
+          used: true,
+        })),
         cutting: group.cutting,
         rule: group.rule,
       },
@@ -38,13 +77,15 @@ export function defaultEdits(view: { readonly groups: readonly PlanningGroup[] }
 }
 
 function groupRequest(group: PlanningGroup, edits: GroupEdits): SolveGroup {
-  const stockOf = (source: SolveStock['source'], supply: number | null) => (entry: { stockId: string; lengthNm: number; costMinor: number }): SolveStock => ({
-    id: entry.stockId,
-    source,
-    lengthNm: entry.lengthNm,
-    costMinor: entry.costMinor,
-    supply,
-  });
+  const stockOf =
+    (source: SolveStock['source'], supply: number | null) =>
+    (entry: { stockId: string; lengthNm: number; costMinor: number }): SolveStock => ({
+      id: entry.stockId,
+      source,
+      lengthNm: entry.lengthNm,
+      costMinor: entry.costMinor,
+      supply,
+    });
   return {
     id: group.id,
     kind: 'linear',

@@ -2,7 +2,12 @@ import { z } from 'zod';
 import { PART_FIELDS } from '#shared/domain/part-list/types.ts';
 import { Can, FamilyName, Instant, OptionalText, Text, UnitName, Version } from '#shared/schemas/common.ts';
 
-export const JobInput = z.strictObject({ number: Text(20), name: Text(80), customer: OptionalText(80), version: Version.optional() });
+export const JobInput = z.strictObject({
+  number: Text(20),
+  name: Text(80),
+  customer: OptionalText(80),
+  version: Version.optional(),
+});
 export const Job = z.object({
   id: z.int(),
   number: z.string(),

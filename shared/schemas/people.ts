@@ -1,7 +1,10 @@
 import { z } from 'zod';
 import { Can, Instant, PersonId, RoleName, Text } from '#shared/schemas/common.ts';
 
-export const EmailAddress = z.email().max(200).transform((text) => text.toLowerCase());
+export const EmailAddress = z
+  .email()
+  .max(200)
+  .transform((text) => text.toLowerCase());
 /** Length over composition, after NIST SP 800-63B: at least 10, at most 128 characters. */
 export const Password = z.string().min(10, 'at least 10 characters').max(128, 'at most 128 characters');
 
@@ -72,7 +75,9 @@ export const SessionView = z.object({
   needsSetUp: z.boolean(),
   /** No production switches: mail stays on this machine, demo sign-ins are offered when the demo shop is loaded. */
   trial: z.boolean(),
-  demoSignIns: z.array(z.object({ role: RoleName, name: z.string(), email: z.string(), password: z.string() })),
+  demoSignIns: z.array(
+    z.object({ role: RoleName, name: z.string(), email: z.string(), password: z.string() }),
+  ),
   shop: Shop.nullable(),
   person: z.object({ id: PersonId, name: z.string(), email: z.string(), role: RoleName }).nullable(),
   can: Can,

@@ -100,7 +100,6 @@ export const PlanView = z.object({
 });
 export const PlanList = z.object({ plans: z.array(PlanSummary), can: Can });
 
-export const PlanVersionInput = z.strictObject({ version: Version });
 export const IssuePlanInput = z.strictObject({ stationId: z.int().min(1), version: Version });
 export const WithdrawPlanInput = z.strictObject({ reason: OptionalText(200), version: Version });
 
@@ -130,9 +129,21 @@ export const PlanningView = z.object({
       mgPerM: z.int(),
       pieces: z.array(PlanPiece),
       /** Offers of exactly this section and grade. */
-      offers: z.array(z.object({ stockId: z.string(), supplierName: z.string(), lengthNm: z.int(), costMinor: z.int() })),
+      offers: z.array(
+        z.object({ stockId: z.string(), supplierName: z.string(), lengthNm: z.int(), costMinor: z.int() }),
+      ),
       /** Racked drops of exactly this section and grade at least as long as the shortest piece. */
-      drops: z.array(z.object({ stockId: z.string(), id: z.int(), tag: z.int(), slot: z.string(), heat: z.string().nullable(), lengthNm: z.int(), costMinor: z.int() })),
+      drops: z.array(
+        z.object({
+          stockId: z.string(),
+          id: z.int(),
+          tag: z.int(),
+          slot: z.string(),
+          heat: z.string().nullable(),
+          lengthNm: z.int(),
+          costMinor: z.int(),
+        }),
+      ),
       /** Lengths usual in the trade, offered when the shop has no offer; a price must be typed. */
       usualLengthsNm: z.array(z.int()),
       stationId: z.int().nullable(),

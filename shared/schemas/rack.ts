@@ -45,7 +45,9 @@ export const Drop = z.object({
   state: DropState,
   heldByPlan: z.object({ id: z.int(), number: z.int(), name: z.string() }).nullable(),
   /** The bar it was cut from, as far as known. */
-  from: z.object({ planId: z.int(), planNumber: z.int(), barId: z.int(), parentTag: z.int().nullable() }).nullable(),
+  from: z
+    .object({ planId: z.int(), planNumber: z.int(), barId: z.int(), parentTag: z.int().nullable() })
+    .nullable(),
   loggedBy: z.string(),
   loggedAt: Instant,
   version: z.int(),
@@ -53,7 +55,11 @@ export const Drop = z.object({
 });
 export const DropEvent = z.object({ at: Instant, who: z.string(), what: z.string(), why: z.string() });
 export const DropList = z.object({ drops: z.array(Drop), can: Can });
-export const DropView = z.object({ drop: Drop, events: z.array(DropEvent), children: z.array(z.object({ id: z.int(), tag: z.int() })) });
+export const DropView = z.object({
+  drop: Drop,
+  events: z.array(DropEvent),
+  children: z.array(z.object({ id: z.int(), tag: z.int() })),
+});
 
 export type DropState = z.infer<typeof DropState>;
 export type Drop = z.infer<typeof Drop>;

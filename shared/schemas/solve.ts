@@ -55,7 +55,11 @@ export const SolveRequest = z
     const groupIds = new Set<string>();
     request.groups.forEach((group, g) => {
       if (groupIds.has(group.id))
-        ctx.addIssue({ code: 'custom', path: ['groups', g, 'id'], message: `two groups are called "${group.id}"` });
+        ctx.addIssue({
+          code: 'custom',
+          path: ['groups', g, 'id'],
+          message: `two groups are called "${group.id}"`,
+        });
       groupIds.add(group.id);
       for (const list of ['pieces', 'stock'] as const) {
         const seen = new Set<string>();
@@ -120,5 +124,7 @@ export type SolveGroupResult = z.infer<typeof SolveGroupResult>;
 
 /* The schemas and the plain types of the domain must not part; either line fails to compile when they do. */
 type Same<A, B> = [A] extends [B] ? ([B] extends [A] ? true : never) : never;
+/** @public */
 export const REQUEST_IS_THE_DOMAIN_TYPE: Same<z.infer<typeof SolveRequest>, domain.SolveRequest> = true;
+/** @public */
 export const RESULT_IS_THE_DOMAIN_TYPE: Same<z.infer<typeof SolveResult>, domain.SolveResult> = true;

@@ -1,23 +1,35 @@
 /** Stations, rules for drops worth keeping, suppliers and offers: what a plan draws its defaults from. */
 import { z } from 'zod';
-import { AllowanceNm, Can, FamilyName, Instant, LengthNm, MoneyMinor, OptionalText, Text, Version } from '#shared/schemas/common.ts';
+import {
+  AllowanceNm,
+  Can,
+  FamilyName,
+  Instant,
+  LengthNm,
+  MoneyMinor,
+  OptionalText,
+  Text,
+  Version,
+} from '#shared/schemas/common.ts';
 
-export const StationInput = z.strictObject({
-  name: Text(40),
-  method: z.enum(['shear', 'saw', 'thermal']),
-  /** A shear has none. */
-  kerfNm: AllowanceNm,
-  headCropNm: AllowanceNm,
-  tailCropNm: AllowanceNm,
-  holdDownNm: AllowanceNm,
-  longestStopNm: LengthNm.nullable(),
-  families: z.array(FamilyName).min(1),
-  note: OptionalText(400),
-  version: Version.optional(),
-}).refine((station) => station.method !== 'shear' || station.kerfNm === 0, {
-  path: ['kerfNm'],
-  message: 'a shear parts the bar without kerf: leave it at 0',
-});
+export const StationInput = z
+  .strictObject({
+    name: Text(40),
+    method: z.enum(['shear', 'saw', 'thermal']),
+    /** A shear has none. */
+    kerfNm: AllowanceNm,
+    headCropNm: AllowanceNm,
+    tailCropNm: AllowanceNm,
+    holdDownNm: AllowanceNm,
+    longestStopNm: LengthNm.nullable(),
+    families: z.array(FamilyName).min(1),
+    note: OptionalText(400),
+    version: Version.optional(),
+  })
+  .refine((station) => station.method !== 'shear' || station.kerfNm === 0, {
+    path: ['kerfNm'],
+    message: 'a shear parts the bar without kerf: leave it at 0',
+  });
 export const Station = z.object({
   id: z.int(),
   name: z.string(),
@@ -49,8 +61,20 @@ export const DropRule = z.object({
 });
 export const DropRuleList = z.object({ rules: z.array(DropRule), can: Can });
 
-export const SupplierInput = z.strictObject({ name: Text(80), email: z.union([z.literal(''), z.email()]).default(''), note: OptionalText(400), version: Version.optional() });
-export const Supplier = z.object({ id: z.int(), name: z.string(), email: z.string(), note: z.string(), version: z.int(), can: Can });
+export const SupplierInput = z.strictObject({
+  name: Text(80),
+  email: z.union([z.literal(''), z.email()]).default(''),
+  note: OptionalText(400),
+  version: Version.optional(),
+});
+export const Supplier = z.object({
+  id: z.int(),
+  name: z.string(),
+  email: z.string(),
+  note: z.string(),
+  version: z.int(),
+  can: Can,
+});
 export const SupplierList = z.object({ suppliers: z.array(Supplier) });
 
 /** A supplier's price for one bar of a section, grade and length. `section` is checked and stored in canonical spelling. */

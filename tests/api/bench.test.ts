@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { refusal } from '#tests/support/error-body.ts';
 import {
+  ANGLE,
   findDrop,
   findPlan,
   inches,
@@ -21,8 +22,6 @@ import { JobView, PartListView } from '#shared/schemas/jobs.ts';
 import { AuditList } from '#shared/schemas/people.ts';
 import { CutBarAnswer, PlanningView, PlanView } from '#shared/schemas/plans.ts';
 import { DropList } from '#shared/schemas/rack.ts';
-
-const ANGLE = { section: 'L3x3x1/4', grade: 'A36' } as const;
 
 describe('the bench', () => {
   let shop: TestShop;

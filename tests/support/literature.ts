@@ -2,7 +2,13 @@ import { readFileSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import type { SolveGroup } from '#shared/domain/solve.ts';
 
-export type Instance = { set: string; name: string; capacity: number; items: [number, number][]; optimum: number };
+export type Instance = {
+  set: string;
+  name: string;
+  capacity: number;
+  items: [number, number][];
+  optimum: number;
+};
 
 const folder = join(import.meta.dirname, '../../fixtures/literature');
 
@@ -19,7 +25,11 @@ export const readInstances = (set: string): Instance[] =>
     .map((line) => JSON.parse(line) as Instance);
 
 /** An instance as a group: a millimetre a unit, one bar length at a price of 100 minor units, a shear without allowances. */
-export const asGroup = ({ name, capacity, items }: Pick<Instance, 'name' | 'capacity' | 'items'>): SolveGroup => ({
+export const asGroup = ({
+  name,
+  capacity,
+  items,
+}: Pick<Instance, 'name' | 'capacity' | 'items'>): SolveGroup => ({
   id: name,
   kind: 'linear',
   pieces: items.map(([length, quantity], i) => ({ id: `p${i}`, lengthNm: length * 1_000_000, quantity })),

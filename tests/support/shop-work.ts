@@ -1,6 +1,6 @@
 /** The everyday acts of a shop through the API, for tests that need one before they can look at the next. */
 import type { z } from 'zod';
-import type { TestShop } from '#tests/support/test-shop.ts';
+import { openTestShop, type TestShop } from '#tests/support/test-shop.ts';
 import { defaultEdits, planRequest } from '#shared/domain/plan-request.ts';
 import type { SolveRequest, SolveResult } from '#shared/domain/solve.ts';
 import { NM_PER_FOOT, NM_PER_INCH } from '#shared/domain/units.ts';
@@ -125,4 +125,24 @@ export async function findPlan(shop: TestShop, planId: number): Promise<PlanView
 
 export async function findDrop(shop: TestShop, dropId: number): Promise<DropView> {
   return read(await (await shop.as('yard')).get(`/api/drops/${dropId}`), 200, DropView);
+}
+
+export const firstOf = <T>(list: readonly T[]): T => {
+  const [first] = list;
+  if (first === undefined) throw new Error('the list is empty');
+  return first;
+};
+
+export const ANGLE = { section: 'L3x3x1/4', grade: 'A36' } as const;
+
+/** A shop with a shear, one offer of 20 ft angle at 98.00 and the drops that are asked for. */
+export async function openAngleShop(dropsIn: readonly number[] = []) {
+  const shop = await openTestShop();
+  const station = await makeStation(shop);
+  const supplier = await makeSupplier(shop, 'Marlgate');
+  const offer = await makeOffer(shop, { ...ANGLE, supplierId: supplier.id, lengthFt: 20, priceMinor: 9800 });
+  const drops = [];
+  for (const lengthIn of dropsIn)
+    drops.push((await logDrop(shop, { ...ANGLE, lengthIn, heat: '47K210' })).drop);
+  return { shop, stationId: station.id, supplierId: supplier.id, offer, drops };
 }

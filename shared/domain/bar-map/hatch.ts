@@ -5,7 +5,15 @@ export const HATCHES = 6;
 
 /** Lines of hatch number `index` inside a strip, clipped to it. */
 export function hatchStrip(index: number, x: number, y: number, width: number, height: number): Shape[] {
-  const line = (x1: number, y1: number, x2: number, y2: number): Shape => ({ kind: 'line', x1, y1, x2, y2, weight: 0.12, tone: 'faint' });
+  const line = (x1: number, y1: number, x2: number, y2: number): Shape => ({
+    kind: 'line',
+    x1,
+    y1,
+    x2,
+    y2,
+    weight: 0.12,
+    tone: 'faint',
+  });
   const slants = (step: number, up: boolean): Shape[] => {
     const lines: Shape[] = [];
     for (let at = x - height; at < x + width; at += step) {
@@ -29,7 +37,10 @@ export function hatchStrip(index: number, x: number, y: number, width: number, h
       return marks;
     }
     case 4:
-      return [line(x, y + height * 0.33, x + width, y + height * 0.33), line(x, y + height * 0.66, x + width, y + height * 0.66)];
+      return [
+        line(x, y + height * 0.33, x + width, y + height * 0.33),
+        line(x, y + height * 0.66, x + width, y + height * 0.66),
+      ];
     case 5:
       return [...slants(2, true), ...slants(2, false)];
     default:

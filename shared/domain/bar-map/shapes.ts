@@ -3,9 +3,29 @@ export type Tone = 'ink' | 'cut' | 'faint';
 export type Fill = 'none' | 'ink' | 'chalk' | 'soap';
 
 export type Shape =
-  | { readonly kind: 'line'; readonly x1: number; readonly y1: number; readonly x2: number; readonly y2: number; readonly weight: number; readonly tone: Tone }
-  | { readonly kind: 'polygon'; readonly points: readonly (readonly [number, number])[]; readonly fill: Fill; readonly weight: number }
-  | { readonly kind: 'circle'; readonly cx: number; readonly cy: number; readonly r: number; readonly fill: Fill; readonly weight: number }
+  | {
+      readonly kind: 'line';
+      readonly x1: number;
+      readonly y1: number;
+      readonly x2: number;
+      readonly y2: number;
+      readonly weight: number;
+      readonly tone: Tone;
+    }
+  | {
+      readonly kind: 'polygon';
+      readonly points: readonly (readonly [number, number])[];
+      readonly fill: Fill;
+      readonly weight: number;
+    }
+  | {
+      readonly kind: 'circle';
+      readonly cx: number;
+      readonly cy: number;
+      readonly r: number;
+      readonly fill: Fill;
+      readonly weight: number;
+    }
   | {
       readonly kind: 'text';
       readonly x: number;
@@ -22,7 +42,12 @@ export type Shape =
     };
 
 /** Where a piece lies on the drawing, for pointing at it and filling it. */
-export type PieceField = { readonly x: number; readonly y: number; readonly width: number; readonly height: number };
+export type PieceField = {
+  readonly x: number;
+  readonly y: number;
+  readonly width: number;
+  readonly height: number;
+};
 
 export type BarMap = {
   readonly width: number;

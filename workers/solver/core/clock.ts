@@ -1,10 +1,22 @@
 /** Time left of a search; passed in, so that tests can hold it still. */
-export type Clock = { readonly now: () => number; readonly startedAt: number; isUp(): boolean; secondsLeft(): number; elapsedMs(): number };
+export type Clock = {
+  readonly now: () => number;
+  readonly startedAt: number;
+  isUp(): boolean;
+  secondsLeft(): number;
+  elapsedMs(): number;
+};
 
 export function makeClock(now: () => number, limitMs: number): Clock {
   const startedAt = now();
   const elapsedMs = () => now() - startedAt;
-  return { now, startedAt, elapsedMs, isUp: () => elapsedMs() >= limitMs, secondsLeft: () => Math.max(0, limitMs - elapsedMs()) / 1000 };
+  return {
+    now,
+    startedAt,
+    elapsedMs,
+    isUp: () => elapsedMs() >= limitMs,
+    secondsLeft: () => Math.max(0, limitMs - elapsedMs()) / 1000,
+  };
 }
 
 /** A clock that runs out earlier than another. */

@@ -13,13 +13,24 @@ import { isProper, type Problem } from '#workers/solver/core/problem.ts';
 const ROUNDS_OF_PRICING = 12;
 const TOLERANCE = 1e-7;
 
-type Parts = { problem: Problem; master: Master; pool: Pool; pricer: Pricer; clock: Clock; random: () => number };
+type Parts = {
+  problem: Problem;
+  master: Master;
+  pool: Pool;
+  pricer: Pricer;
+  clock: Clock;
+  random: () => number;
+};
 
 /**
  * One dive. Returns null when the plan so far already costs more than `cutoff` or the time is up before a plan stands. `boldness` 0 takes the largest
  * fraction, above it a random one of the larger.
  */
-export function dive({ problem, master, pool, pricer, clock, random }: Parts, cutoff: number, boldness: number): Use[] | null {
+export function dive(
+  { problem, master, pool, pricer, clock, random }: Parts,
+  cutoff: number,
+  boldness: number,
+): Use[] | null {
   const residual = Float64Array.from(problem.items, ({ demand }) => demand);
   const supply = Float64Array.from(problem.stocks, (bar) => bar.supply);
   const uses: Use[] = [];
@@ -49,7 +60,12 @@ export function dive({ problem, master, pool, pricer, clock, random }: Parts, cu
       let lp = master.solve(clock.secondsLeft());
       for (let round = 0; lp && round < ROUNDS_OF_PRICING; round++) {
         const open = pricer
-          .findColumns(lp.duals, lp.stockDuals.map((dual, s) => ((supply[s] ?? 0) > 0 ? dual : largest * 100)), residual, TOLERANCE * largest)
+          .findColumns(
+            lp.duals,
+            lp.stockDuals.map((dual, s) => ((supply[s] ?? 0) > 0 ? dual : largest * 100)),
+            residual,
+            TOLERANCE * largest,
+          )
           .filter(({ column }) => isProper(column, residual));
         const fresh = open.filter(({ column }) => pool.add(column)).length;
         if (fresh === 0 || clock.isUp()) break;
@@ -57,7 +73,9 @@ export function dive({ problem, master, pool, pricer, clock, random }: Parts, cu
       }
       if (!lp) return null;
       if (spent + lp.value > cutoff && !lp.missing) return null;
-      const order = [...lp.x.keys()].filter((p) => (lp.x[p] ?? 0) > 1e-6).sort((a, b) => (lp.x[b] ?? 0) - (lp.x[a] ?? 0));
+      const order = [...lp.x.keys()]
+        .filter((p) => (lp.x[p] ?? 0) > 1e-6)
+        .sort((a, b) => (lp.x[b] ?? 0) - (lp.x[a] ?? 0));
       const whole = order.filter((p) => (lp.x[p] ?? 0) >= 1 - 1e-6);
       if (whole.length > 0) {
         for (const p of whole) fix(p, Math.floor((lp.x[p] ?? 0) + 1e-6));
@@ -73,6 +91,9 @@ export function dive({ problem, master, pool, pricer, clock, random }: Parts, cu
     }
     return uses;
   } finally {
-    master.restrict(Float64Array.from(problem.items, ({ demand }) => demand), Float64Array.from(problem.stocks, (bar) => bar.supply));
+    master.restrict(
+      Float64Array.from(problem.items, ({ demand }) => demand),
+      Float64Array.from(problem.stocks, (bar) => bar.supply),
+    );
   }
 }

@@ -50,7 +50,11 @@ export function enumerateColumns(
     const capacity = grid.capacities[s] ?? 0;
     // The most a leftover of up to w cells can bring.
     const credit = new Float64Array(capacity + 1);
-    for (let w = 1; w <= capacity; w++) credit[w] = Math.max(credit[w - 1] ?? 0, creditMinor(Math.max(0, Math.min(bar.usable, bar.usable - (capacity - w) * grid.cellNm)), drops));
+    for (let w = 1; w <= capacity; w++)
+      credit[w] = Math.max(
+        credit[w - 1] ?? 0,
+        creditMinor(Math.max(0, Math.min(bar.usable, bar.usable - (capacity - w) * grid.cellNm)), drops),
+      );
 
     const visit = (i: number, room: number, earned: number): void => {
       if (gaveUp) return;
@@ -58,7 +62,11 @@ export function enumerateColumns(
       if (base - earned - (best[i * cells + room] as number) - (credit[room] ?? 0) > slack) return;
       if (i === n) {
         if (room === capacity) return;
-        const column = makeColumn(problem, s, new Map([...counts].flatMap((count, item) => (count > 0 ? [[item, count] as const] : []))));
+        const column = makeColumn(
+          problem,
+          s,
+          new Map([...counts].flatMap((count, item) => (count > 0 ? [[item, count] as const] : []))),
+        );
         if (column && column.cost + (stockDuals[s] ?? 0) - earned <= slack) {
           columns.push(column);
           if (columns.length > most) gaveUp = true;

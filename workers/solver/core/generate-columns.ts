@@ -50,7 +50,9 @@ export function generateColumns(
     best = {
       bound: better ? bound : (previous?.bound ?? 0),
       duals: better ? lp.duals.map((dual) => dual / ratio) : (previous?.duals ?? lp.duals),
-      stockDuals: better ? lp.stockDuals.map((dual) => dual / ratio) : (previous?.stockDuals ?? lp.stockDuals),
+      stockDuals: better
+        ? lp.stockDuals.map((dual) => dual / ratio)
+        : (previous?.stockDuals ?? lp.stockDuals),
       x: lp.x,
       missing: lp.missing,
     };

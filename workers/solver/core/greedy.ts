@@ -26,7 +26,11 @@ function fillBar(problem: Problem, stock: number, residual: ArrayLike<number>): 
   });
   const order = [...counts.keys()].reverse();
   while (pieces > 0) {
-    if (fits(bar.usable, total, pieces, cutting) && canClamp(leftoverNm(bar.usable, total, pieces, cutting), longest, cutting)) return counts;
+    if (
+      fits(bar.usable, total, pieces, cutting) &&
+      canClamp(leftoverNm(bar.usable, total, pieces, cutting), longest, cutting)
+    )
+      return counts;
     const i = order.find((item) => (counts.get(item) ?? 0) > 0);
     if (i === undefined) return null;
     counts.set(i, (counts.get(i) ?? 0) - 1);
@@ -47,7 +51,8 @@ export function fillGreedily(problem: Problem, residual: Float64Array, supply: F
       const column = counts ? makeColumn(problem, s, counts) : null;
       if (!column) continue;
       let made = 0;
-      for (let j = 0; j < column.items.length; j++) made += (column.counts[j] ?? 0) * (problem.items[column.items[j] ?? 0]?.lengthNm ?? 0);
+      for (let j = 0; j < column.items.length; j++)
+        made += (column.counts[j] ?? 0) * (problem.items[column.items[j] ?? 0]?.lengthNm ?? 0);
       const score = column.cost / made;
       if (!best || score < best.score) best = { column, score };
     }
@@ -81,7 +86,9 @@ export function bestFitDecreasing(problem: Problem): Use[] {
         let chosen = -1;
         problem.stocks.forEach((bar, s) => {
           if ((supply[s] ?? 0) < 1 || bar.usable < lengthNm) return;
-          const cost = (bar.costMinor - creditMinor(Math.max(0, bar.usable - step), drops)) / Math.min(bar.usable, Math.max(lengthNm, bar.usable * 0.9));
+          const cost =
+            (bar.costMinor - creditMinor(Math.max(0, bar.usable - step), drops)) /
+            Math.min(bar.usable, Math.max(lengthNm, bar.usable * 0.9));
           if (cost < cheapest) [cheapest, chosen] = [cost, s];
         });
         const bar = problem.stocks[chosen];

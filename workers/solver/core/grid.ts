@@ -22,8 +22,12 @@ const gcd = (a: number, b: number): number => {
 };
 
 function gridOf(problem: Problem, cellNm: number, round: (x: number) => number, exact: boolean): Grid {
-  const weights = Int32Array.from(problem.items, ({ lengthNm }) => Math.max(1, round((lengthNm + problem.kerf) / cellNm)));
-  const capacities = Int32Array.from(problem.stocks, ({ usable }) => Math.max(0, Math.floor((usable + problem.kerf) / cellNm)));
+  const weights = Int32Array.from(problem.items, ({ lengthNm }) =>
+    Math.max(1, round((lengthNm + problem.kerf) / cellNm)),
+  );
+  const capacities = Int32Array.from(problem.stocks, ({ usable }) =>
+    Math.max(0, Math.floor((usable + problem.kerf) / cellNm)),
+  );
   return { cellNm, weights, capacities, cells: Math.max(0, ...capacities), exact };
 }
 

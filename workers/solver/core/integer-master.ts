@@ -13,7 +13,13 @@ export type IntegerAnswer = {
 };
 
 /** Every demand exactly, no supply exceeded, cost below `cutoff` (minor units). */
-export function solveInteger(highs: Highs, problem: Problem, columns: readonly Column[], cutoff: number, seconds: number): IntegerAnswer {
+export function solveInteger(
+  highs: Highs,
+  problem: Problem,
+  columns: readonly Column[],
+  cutoff: number,
+  seconds: number,
+): IntegerAnswer {
   const { items, stocks } = problem;
   const n = items.length;
   const limited = stocks.flatMap(({ supply }, s) => (Number.isFinite(supply) ? [s] : []));
@@ -35,7 +41,8 @@ export function solveInteger(highs: Highs, problem: Problem, columns: readonly C
   }
   const mostOf = ({ items: list, counts, stock }: Column) => {
     let most = stocks[stock]?.supply ?? 0;
-    for (let j = 0; j < list.length; j++) most = Math.min(most, Math.floor((items[list[j] ?? 0]?.demand ?? 0) / (counts[j] ?? 1)));
+    for (let j = 0; j < list.length; j++)
+      most = Math.min(most, Math.floor((items[list[j] ?? 0]?.demand ?? 0) / (counts[j] ?? 1)));
     return most;
   };
   return highs.withModel(
@@ -47,20 +54,42 @@ export function solveInteger(highs: Highs, problem: Problem, columns: readonly C
       colUpper: columns.map(mostOf),
       rowLower: [...items.map(({ demand }) => demand), ...limited.map(() => -highs.infinity)],
       rowUpper: [...items.map(({ demand }) => demand), ...limited.map((s) => stocks[s]?.supply ?? 0)],
-      matrix: { format: 'csc', numRows: n + limited.length, numCols: columns.length, starts, indices, values },
+      matrix: {
+        format: 'csc',
+        numRows: n + limited.length,
+        numCols: columns.length,
+        starts,
+        indices,
+        values,
+      },
       integrality: columns.map(() => highs.constants.variableType.integer),
     },
     (model) => {
-      model.options.set({ output_flag: false, time_limit: Math.max(0.05, seconds), objective_bound: cutoff, mip_rel_gap: 0, mip_abs_gap: 1e-7, random_seed: 1 });
+      model.options.set({
+        output_flag: false,
+        time_limit: Math.max(0.05, seconds),
+        objective_bound: cutoff,
+        mip_rel_gap: 0,
+        mip_abs_gap: 1e-7,
+        random_seed: 1,
+      });
       model.run();
       const { modelStatus } = highs.constants;
       const status = model.getModelStatus();
-      const complete = status === modelStatus.optimal || status === modelStatus.infeasible || status === modelStatus.objectiveBound;
+      const complete =
+        status === modelStatus.optimal ||
+        status === modelStatus.infeasible ||
+        status === modelStatus.objectiveBound;
       const { colValue } = model.getSolution();
       const value = model.getObjectiveValue();
       const dual = Number(model.info.get('mip_dual_bound'));
       const bound = complete ? cutoff : Number.isFinite(dual) ? Math.min(dual, cutoff) : 0;
-      if (status === modelStatus.infeasible || status === modelStatus.objectiveBound || colValue.length !== columns.length || !(value < cutoff))
+      if (
+        status === modelStatus.infeasible ||
+        status === modelStatus.objectiveBound ||
+        colValue.length !== columns.length ||
+        !(value < cutoff)
+      )
         return { uses: null, complete, bound };
       const uses = columns.flatMap((column, p): Use[] => {
         const repeat = Math.round(colValue[p] ?? 0);

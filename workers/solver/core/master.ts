@@ -6,7 +6,13 @@ export type Master = {
   /** Adds a column, or lets it in again; returns its position in `columns`. */
   add(column: Column): void;
   readonly columns: readonly Column[];
-  solve(secondsLeft: number): { value: number; x: Float64Array; duals: Float64Array; stockDuals: Float64Array; missing: boolean } | null;
+  solve(secondsLeft: number): {
+    value: number;
+    x: Float64Array;
+    duals: Float64Array;
+    stockDuals: Float64Array;
+    missing: boolean;
+  } | null;
   /** What is still wanted and to be had; columns that would make too much are shut. */
   restrict(residual: Float64Array, supply: Float64Array): void;
   lpRuns(): number;
@@ -60,7 +66,8 @@ export function makeMaster(highs: Highs, problem: Problem): Master {
       for (const [s, row] of rowOfStock) model.changeRowBounds(row, -highs.infinity, supply[s] ?? 0);
       columns.forEach((column, p) => {
         let proper = true;
-        for (let j = 0; j < column.items.length; j++) if ((column.counts[j] ?? 0) > (residual[column.items[j] ?? 0] ?? 0)) proper = false;
+        for (let j = 0; j < column.items.length; j++)
+          if ((column.counts[j] ?? 0) > (residual[column.items[j] ?? 0] ?? 0)) proper = false;
         if (proper !== open[p]) {
           model.changeColBounds(n + p, 0, proper ? highs.infinity : 0);
           open[p] = proper;

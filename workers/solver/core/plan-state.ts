@@ -2,7 +2,13 @@
 import { columnKey, type Column, type Problem } from '#workers/solver/core/problem.ts';
 
 export type Use = { readonly column: Column; readonly repeat: number };
-export type Plan = { readonly uses: readonly Use[]; readonly cost: number; readonly bars: number; readonly layouts: number; readonly longestDrop: number };
+export type Plan = {
+  readonly uses: readonly Use[];
+  readonly cost: number;
+  readonly bars: number;
+  readonly layouts: number;
+  readonly longestDrop: number;
+};
 
 export function makePlan(problem: Problem, uses: readonly Use[]): Plan {
   const merged = new Map<string, { column: Column; repeat: number }>();
@@ -19,7 +25,11 @@ export function makePlan(problem: Problem, uses: readonly Use[]): Plan {
     cost: list.reduce((sum, { column, repeat }) => sum + repeat * column.cost, 0),
     bars: list.reduce((sum, { repeat }) => sum + repeat, 0),
     layouts: list.length,
-    longestDrop: list.reduce((longest, { column }) => (column.leftover >= problem.group.drops.keepFromNm ? Math.max(longest, column.leftover) : longest), 0),
+    longestDrop: list.reduce(
+      (longest, { column }) =>
+        column.leftover >= problem.group.drops.keepFromNm ? Math.max(longest, column.leftover) : longest,
+      0,
+    ),
   };
 }
 

@@ -13,7 +13,12 @@ export type Priced = { readonly column: Column; readonly reducedCost: number };
 
 export type Pricer = {
   /** Columns of negative reduced cost, the best few of each stock. `limit` bounds each item (residual demand). */
-  findColumns(duals: Float64Array, stockDuals: Float64Array, limit: ArrayLike<number>, tolerance: number): Priced[];
+  findColumns(
+    duals: Float64Array,
+    stockDuals: Float64Array,
+    limit: ArrayLike<number>,
+    tolerance: number,
+  ): Priced[];
   /**
    * The factor by which duals must shrink so that no column at all has negative reduced cost (Farley 1990): at most 1 on an optimal master.
    * Infinity when a free bar would earn something.
@@ -114,7 +119,8 @@ export function makePricer(problem: Problem, search: Grid, bound: Grid): Pricer 
           const column = columnAt(search, s, w);
           if (!column) continue;
           let reducedCost = column.cost + (stockDuals[s] ?? 0);
-          for (let j = 0; j < column.items.length; j++) reducedCost -= (column.counts[j] ?? 0) * (duals[column.items[j] ?? 0] ?? 0);
+          for (let j = 0; j < column.items.length; j++)
+            reducedCost -= (column.counts[j] ?? 0) * (duals[column.items[j] ?? 0] ?? 0);
           if (reducedCost < -tolerance) found.push({ column, reducedCost });
         }
       });

@@ -4,7 +4,11 @@ import { canClamp, creditRate, fits, leftoverNm, usableNm } from '#shared/domain
 import type { SolveGroup, SolvePiece, SolveStock } from '#shared/domain/solve.ts';
 
 /** All pieces of one length, longest first in `Problem.items`. */
-export type Item = { readonly lengthNm: number; readonly demand: number; readonly pieces: readonly SolvePiece[] };
+export type Item = {
+  readonly lengthNm: number;
+  readonly demand: number;
+  readonly pieces: readonly SolvePiece[];
+};
 
 /** Bars of one length, cost and source. `supply` Infinity: as many as wanted. */
 export type Stock = {
@@ -70,12 +74,19 @@ export function makeProblem(group: SolveGroup, without: ReadonlyMap<string, numb
     kerf: group.cutting.kerfNm,
     holdDown: group.cutting.holdDownNm,
     wholeBars:
-      creditMinorPerM === 0 && scrapMinorPerM === 0 && stocks.every(({ costMinor }) => costMinor === stocks[0]?.costMinor) && (stocks[0]?.costMinor ?? 0) > 0,
+      creditMinorPerM === 0 &&
+      scrapMinorPerM === 0 &&
+      stocks.every(({ costMinor }) => costMinor === stocks[0]?.costMinor) &&
+      (stocks[0]?.costMinor ?? 0) > 0,
   };
 }
 
 /** The column of these counts on this stock, or null when it is no layout. */
-export function makeColumn(problem: Problem, stock: number, counts: ReadonlyMap<number, number>): Column | null {
+export function makeColumn(
+  problem: Problem,
+  stock: number,
+  counts: ReadonlyMap<number, number>,
+): Column | null {
   const bar = problem.stocks[stock];
   if (!bar) return null;
   const { cutting, drops } = problem.group;
@@ -102,7 +113,8 @@ export function makeColumn(problem: Problem, stock: number, counts: ReadonlyMap<
 }
 
 /** Tells two columns apart: same stock, same pieces. */
-export const columnKey = ({ stock, items, counts }: Column): string => `${stock}:${items.join(',')}:${counts.join(',')}`;
+export const columnKey = ({ stock, items, counts }: Column): string =>
+  `${stock}:${items.join(',')}:${counts.join(',')}`;
 
 /** True when the column makes no more of anything than is still wanted. */
 export function isProper({ items, counts }: Column, residual: ArrayLike<number>): boolean {
@@ -113,5 +125,7 @@ export function isProper({ items, counts }: Column, residual: ArrayLike<number>)
 /** Items no bar can take even alone, by index. With a hold-down a short piece may still ride with a longer one. */
 export function hopelessItems(problem: Problem): number[] {
   const { cutting } = problem.group;
-  return problem.items.flatMap(({ lengthNm }, i) => (problem.stocks.some((bar) => fits(bar.usable, lengthNm, 1, cutting)) ? [] : [i]));
+  return problem.items.flatMap(({ lengthNm }, i) =>
+    problem.stocks.some((bar) => fits(bar.usable, lengthNm, 1, cutting)) ? [] : [i],
+  );
 }

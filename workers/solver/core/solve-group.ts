@@ -48,14 +48,19 @@ export function solveGroup(group: SolveGroup, options: SolveOptions, hooks: Solv
 
   const whole = makeProblem(group);
   for (const i of hopelessItems(whole))
-    for (const { id, quantity } of whole.items[i]?.pieces ?? []) leaveOut(id, quantity, whole.stocks.length === 0 ? 'no stock is given' : 'longer than any stock');
+    for (const { id, quantity } of whole.items[i]?.pieces ?? [])
+      leaveOut(id, quantity, whole.stocks.length === 0 ? 'no stock is given' : 'longer than any stock');
 
   let found = search(makeProblem(group, without), options, hooks, clock, work);
   // Supplies that run out, or a hold-down no bar satisfies: what is left over is named, and the rest is planned and bounded for itself.
   if (found.plan && !found.placed) {
     const made = new Map<number, number>();
     for (const { column, repeat } of found.plan.uses)
-      for (let j = 0; j < column.items.length; j++) made.set(column.items[j] ?? 0, (made.get(column.items[j] ?? 0) ?? 0) + repeat * (column.counts[j] ?? 0));
+      for (let j = 0; j < column.items.length; j++)
+        made.set(
+          column.items[j] ?? 0,
+          (made.get(column.items[j] ?? 0) ?? 0) + repeat * (column.counts[j] ?? 0),
+        );
     found.problem.items.forEach(({ demand, pieces }, i) => {
       let left = demand - (made.get(i) ?? 0);
       for (const { id, quantity } of [...pieces].reverse()) {
@@ -69,9 +74,19 @@ export function solveGroup(group: SolveGroup, options: SolveOptions, hooks: Solv
     if (!found.placed) found = { ...found, plan: kept, bound: 0 };
   }
   const { problem, plan, bound } = found;
-  hooks.onProgress?.({ groupId: group.id, phase: 'done', netCostMinor: plan?.cost ?? 0, boundMinor: bound, bars: plan?.bars ?? 0, elapsedMs: clock.elapsedMs() });
+  hooks.onProgress?.({
+    groupId: group.id,
+    phase: 'done',
+    netCostMinor: plan?.cost ?? 0,
+    boundMinor: bound,
+    bars: plan?.bars ?? 0,
+    elapsedMs: clock.elapsedMs(),
+  });
   const merged = mergeUnplaced(unplaced);
-  return statePlan(group, problem, plan ?? makePlan(problem, []), bound, merged, { ...work, elapsedMs: clock.elapsedMs() });
+  return statePlan(group, problem, plan ?? makePlan(problem, []), bound, merged, {
+    ...work,
+    elapsedMs: clock.elapsedMs(),
+  });
 }
 
 function mergeUnplaced(list: readonly SolveUnplaced[]): SolveUnplaced[] {
@@ -88,7 +103,9 @@ const supplyOf = (problem: Problem) => Float64Array.from(problem.stocks, ({ supp
 
 function makesAll(problem: Problem, uses: readonly Use[]): boolean {
   const left = residualOf(problem);
-  for (const { column, repeat } of uses) for (let j = 0; j < column.items.length; j++) left[column.items[j] ?? 0] = (left[column.items[j] ?? 0] ?? 0) - repeat * (column.counts[j] ?? 0);
+  for (const { column, repeat } of uses)
+    for (let j = 0; j < column.items.length; j++)
+      left[column.items[j] ?? 0] = (left[column.items[j] ?? 0] ?? 0) - repeat * (column.counts[j] ?? 0);
   return left.every((n) => n === 0);
 }
 
@@ -107,7 +124,14 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
   let bound = 0;
   let placed = false;
   const tell = (phase: SolveProgress['phase']) =>
-    hooks.onProgress?.({ groupId: problem.group.id, phase, netCostMinor: placed ? (plan?.cost ?? null) : null, boundMinor: bound, bars: plan?.bars ?? null, elapsedMs: clock.elapsedMs() });
+    hooks.onProgress?.({
+      groupId: problem.group.id,
+      phase,
+      netCostMinor: placed ? (plan?.cost ?? null) : null,
+      boundMinor: bound,
+      bars: plan?.bars ?? null,
+      elapsedMs: clock.elapsedMs(),
+    });
   const raise = (value: number) => {
     const whole = step > 0 ? Math.ceil(value / step - 1e-6) * step : value;
     if (whole > bound) bound = whole;
@@ -143,7 +167,11 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
     const random = makeRandom(options.seed);
     for (let k = 0; k < DIVES && !clock.isUp() && !isProven(); k++) {
       const cutoff = placed && plan ? (plan as Plan).cost - Math.max(step, 1e-6) + 1e-7 : Infinity;
-      const uses = dive({ problem, master, pool, pricer, clock, random }, cutoff, k === 0 ? 0 : 0.25 + 0.05 * k);
+      const uses = dive(
+        { problem, master, pool, pricer, clock, random },
+        cutoff,
+        k === 0 ? 0 : 0.25 + 0.05 * k,
+      );
       work.dives++;
       if (uses) offer(uses, 'dive');
       tell('dive');
@@ -152,7 +180,13 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
     if (!isProven() && !clock.isUp()) tryProof(relaxation, MOST_ENUMERATED, 0.6);
     if (!isProven() && !clock.isUp() && placed) {
       const { columns } = trimmed(master.columns, relaxation, MOST_MASTER_COLUMNS);
-      const answer = solveInteger(hooks.highs, problem, columns, (plan as Plan | null)?.cost ?? Infinity, clock.secondsLeft());
+      const answer = solveInteger(
+        hooks.highs,
+        problem,
+        columns,
+        (plan as Plan | null)?.cost ?? Infinity,
+        clock.secondsLeft(),
+      );
       if (answer.uses) offer(answer.uses, 'master');
       if (!isProven() && !clock.isUp()) tryProof(relaxation, MOST_ENUMERATED, 1);
     }
@@ -182,10 +216,15 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
 }
 
 /** The columns of least reduced cost. */
-function trimmed(columns: readonly Column[], { duals, stockDuals }: Relaxation, most: number): { columns: Column[] } {
+function trimmed(
+  columns: readonly Column[],
+  { duals, stockDuals }: Relaxation,
+  most: number,
+): { columns: Column[] } {
   const priced = columns.map((column) => {
     let reduced = column.cost + (stockDuals[column.stock] ?? 0);
-    for (let j = 0; j < column.items.length; j++) reduced -= (column.counts[j] ?? 0) * (duals[column.items[j] ?? 0] ?? 0);
+    for (let j = 0; j < column.items.length; j++)
+      reduced -= (column.counts[j] ?? 0) * (duals[column.items[j] ?? 0] ?? 0);
     return { column, reduced };
   });
   priced.sort((a, b) => a.reduced - b.reduced);

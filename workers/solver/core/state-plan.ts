@@ -5,7 +5,11 @@ import type { Plan } from '#workers/solver/core/plan-state.ts';
 import type { Column, Problem } from '#workers/solver/core/problem.ts';
 
 /** Pieces of the column, longest first, equal ones together; the last must be one the hold-down can grip. */
-function orderCuts(problem: Problem, { items, counts, leftover }: Column, take: (item: number) => string): { pieceId: string; lengthNm: number }[] {
+function orderCuts(
+  problem: Problem,
+  { items, counts, leftover }: Column,
+  take: (item: number) => string,
+): { pieceId: string; lengthNm: number }[] {
   const cuts: { pieceId: string; lengthNm: number }[] = [];
   for (let j = 0; j < items.length; j++) {
     const item = items[j] ?? 0;
@@ -31,7 +35,9 @@ function makeLayouts(problem: Problem, plan: Plan): SolveLayout[] {
     entry.quantity--;
     return entry.id;
   };
-  const bars = problem.stocks.map(({ bars: list }) => list.map(({ id, supply }) => ({ id, supply: supply ?? Infinity })));
+  const bars = problem.stocks.map(({ bars: list }) =>
+    list.map(({ id, supply }) => ({ id, supply: supply ?? Infinity })),
+  );
   const takeBar = (stock: number) => {
     const entry = bars[stock]?.find(({ supply }) => supply > 0);
     if (!entry) throw new Error('a plan uses no more than there is');
@@ -39,7 +45,9 @@ function makeLayouts(problem: Problem, plan: Plan): SolveLayout[] {
     return entry.id;
   };
   const layouts = new Map<string, SolveLayout>();
-  const uses = [...plan.uses].sort((a, b) => a.column.stock - b.column.stock || b.repeat - a.repeat || a.column.leftover - b.column.leftover);
+  const uses = [...plan.uses].sort(
+    (a, b) => a.column.stock - b.column.stock || b.repeat - a.repeat || a.column.leftover - b.column.leftover,
+  );
   for (const { column, repeat } of uses)
     for (let k = 0; k < repeat; k++) {
       const stockId = takeBar(column.stock);
@@ -52,7 +60,14 @@ function makeLayouts(problem: Problem, plan: Plan): SolveLayout[] {
       const key = `${stockId}|${cuts.map(({ pieceId }) => pieceId).join('|')}`;
       const known = layouts.get(key);
       if (known) known.repeat++;
-      else layouts.set(key, { stockId, repeat: 1, cuts, leftoverNm: column.leftover, keeps: keepsDrop(column.leftover, drops) });
+      else
+        layouts.set(key, {
+          stockId,
+          repeat: 1,
+          cuts,
+          leftoverNm: column.leftover,
+          keeps: keepsDrop(column.leftover, drops),
+        });
     }
   return [...layouts.values()];
 }
@@ -60,7 +75,14 @@ function makeLayouts(problem: Problem, plan: Plan): SolveLayout[] {
 const PROVEN_GAP = 1e-6;
 
 /** The answer of the contract. The cost is added up exactly; the bound never exceeds it. */
-export function statePlan(group: SolveGroup, problem: Problem, plan: Plan, bound: number, unplaced: SolveUnplaced[], work: SolveGroupResult['work']): SolveGroupResult {
+export function statePlan(
+  group: SolveGroup,
+  problem: Problem,
+  plan: Plan,
+  bound: number,
+  unplaced: SolveUnplaced[],
+  work: SolveGroupResult['work'],
+): SolveGroupResult {
   const layouts = makeLayouts(problem, plan);
   const stock = new Map(group.stock.map((entry) => [entry.id, entry]));
   let net = 0n;
@@ -74,7 +96,10 @@ export function statePlan(group: SolveGroup, problem: Problem, plan: Plan, bound
     if (bar.source === 'drop') dropsUsed += repeat;
   }
   const netCostMinor = billionthsToMinor(net);
-  const boundMinor = Math.min(netCostMinor, netCostMinor - bound <= PROVEN_GAP * 0.1 * Math.max(1, netCostMinor) ? netCostMinor : Math.max(0, bound));
+  const boundMinor = Math.min(
+    netCostMinor,
+    netCostMinor - bound <= PROVEN_GAP * 0.1 * Math.max(1, netCostMinor) ? netCostMinor : Math.max(0, bound),
+  );
   const gap = netCostMinor > 0 ? (netCostMinor - boundMinor) / netCostMinor : 0;
   return {
     id: group.id,

@@ -28,7 +28,11 @@ function useFonts(): boolean {
   const [ready, setReady] = useState(document.fonts.status === 'loaded');
   useEffect(() => {
     let gone = false;
-    Promise.all(['700 12px "JetBrains Mono"', '400 12px "JetBrains Mono"', '600 12px "Barlow Condensed"'].map((font) => document.fonts.load(font))).then(
+    Promise.all(
+      ['700 12px "JetBrains Mono"', '400 12px "JetBrains Mono"', '600 12px "Barlow Condensed"'].map((font) =>
+        document.fonts.load(font),
+      ),
+    ).then(
       () => !gone && setReady(true),
       () => !gone && setReady(true),
     );
@@ -46,21 +50,33 @@ export function BarMapFigure({ group, layoutIndex, bar, bars, activeCut, zoom = 
   const [pointed, setPointed] = useState<number | null>(null);
   const fonts = useFonts();
   const drawing = useMemo(
-    () => barDrawing(group, layoutIndex, formats, { bar, single: bar !== undefined, ...(bars ? { bars } : {}) }),
+    () =>
+      barDrawing(group, layoutIndex, formats, { bar, single: bar !== undefined, ...(bars ? { bars } : {}) }),
     [group, layoutIndex, formats, bar, bars],
   );
   const fit = Math.max(NARROWEST_MM, width / PX_PER_MM);
   const scale = width > 0 ? width / fit : PX_PER_MM;
-  const map = useMemo(() => (drawing && width > 0 ? drawBar(drawing, fit * zoom) : null), [drawing, width, fit, zoom]);
+  const map = useMemo(
+    () => (drawing && width > 0 ? drawBar(drawing, fit * zoom) : null),
+    [drawing, width, fit, zoom],
+  );
   if (!drawing) return null;
   const filled = pointed ?? activeCut ?? null;
   const facts = drawing.cuts[filled ?? -1];
   const words = `${drawing.title}, ${drawing.facts.replace(/\s+/g, ' ')}${drawing.repeat > 1 ? `, cut ${drawing.repeat} times` : ''}: ${drawing.cuts
     .map(({ mark, lengthNm }) => `${mark} ${formats.length(lengthNm)}`)
-    .join(', ')}; ${drawing.leftoverNm === 0 ? 'nothing left' : `${formats.length(drawing.leftoverNm)} ${drawing.keeps ? 'kept as a drop' : 'scrap'}`}.`;
+    .join(
+      ', ',
+    )}; ${drawing.leftoverNm === 0 ? 'nothing left' : `${formats.length(drawing.leftoverNm)} ${drawing.keeps ? 'kept as a drop' : 'scrap'}`}.`;
   return (
     <figure className="m-0">
-      <div ref={frame} className="overflow-x-auto" role="img" aria-label={words} tabIndex={zoom > 1 ? 0 : undefined}>
+      <div
+        ref={frame}
+        className="overflow-x-auto"
+        role="img"
+        aria-label={words}
+        tabIndex={zoom > 1 ? 0 : undefined}
+      >
         {map && (
           <Stage
             width={map.width * scale}
@@ -69,7 +85,10 @@ export function BarMapFigure({ group, layoutIndex, bar, bars, activeCut, zoom = 
               const at = event.target.getStage()?.getPointerPosition();
               if (!at) return;
               const [x, y] = [at.x / scale, at.y / scale];
-              const hit = map.pieces.findIndex((field) => x >= field.x && x <= field.x + field.width && y >= field.y && y <= field.y + field.height);
+              const hit = map.pieces.findIndex(
+                (field) =>
+                  x >= field.x && x <= field.x + field.width && y >= field.y && y <= field.y + field.height,
+              );
               setPointed(hit < 0 ? null : hit);
             }}
             onMouseLeave={() => setPointed(null)}
@@ -86,7 +105,9 @@ export function BarMapFigure({ group, layoutIndex, bar, bars, activeCut, zoom = 
         )}
       </div>
       <figcaption className="min-h-6 pl-1 font-mono text-sm text-muted" aria-hidden>
-        {facts ? `${facts.mark} · stop ${formats.setting(facts.lengthNm)} · tape ${formats.length(facts.startNm + facts.lengthNm)}` : ''}
+        {facts
+          ? `${facts.mark} · stop ${formats.setting(facts.lengthNm)} · tape ${formats.length(facts.startNm + facts.lengthNm)}`
+          : ''}
       </figcaption>
     </figure>
   );

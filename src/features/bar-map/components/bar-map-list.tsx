@@ -17,20 +17,45 @@ export function BarMapList({ group, bars }: { group: PlanGroup; bars: readonly B
     setOffset(list.current?.offsetTop ?? 0);
   }, []);
   const layouts = group.result.layouts;
-  const rows = useWindowVirtualizer({ count: layouts.length, estimateSize: () => ESTIMATE_PX, overscan: 3, scrollMargin: offset });
+  const rows = useWindowVirtualizer({
+    count: layouts.length,
+    estimateSize: () => ESTIMATE_PX,
+    overscan: 3,
+    scrollMargin: offset,
+  });
   const scale = ZOOMS[zoom] ?? 1;
   return (
     <>
-      <div className="mb-2 flex items-center gap-2" role="group" aria-label={`Size of the drawings of ${group.section}`}>
-        <Button size="small" disabled={zoom === 0} onClick={() => setZoom(zoom - 1)} aria-label="Smaller drawings">
+      <div
+        className="mb-2 flex items-center gap-2"
+        role="group"
+        aria-label={`Size of the drawings of ${group.section}`}
+      >
+        <Button
+          size="small"
+          disabled={zoom === 0}
+          onClick={() => setZoom(zoom - 1)}
+          aria-label="Smaller drawings"
+        >
           −
         </Button>
         <span className="w-16 text-center font-mono">{Math.round(scale * 100)} %</span>
-        <Button size="small" disabled={zoom === ZOOMS.length - 1} onClick={() => setZoom(zoom + 1)} aria-label="Larger drawings">
+        <Button
+          size="small"
+          disabled={zoom === ZOOMS.length - 1}
+          onClick={() => setZoom(zoom + 1)}
+          aria-label="Larger drawings"
+        >
           +
         </Button>
       </div>
-      <div ref={list} className="relative" style={{ height: rows.getTotalSize() }} role="list" aria-label={`Bar maps of ${group.section} ${group.grade}`}>
+      <div
+        ref={list}
+        className="relative"
+        style={{ height: rows.getTotalSize() }}
+        role="list"
+        aria-label={`Bar maps of ${group.section} ${group.grade}`}
+      >
         {rows.getVirtualItems().map((row) => (
           <div
             key={row.key}

@@ -12,7 +12,12 @@ export function CutTable({ group, layoutIndex }: { group: PlanGroup; layoutIndex
       <summary className="inline-block min-h-6 py-1 text-layout underline-offset-4 hover:underline">
         {layout.cuts.length} {layout.cuts.length === 1 ? 'cut' : 'cuts'} in numbers
       </summary>
-      <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`Cuts of layout ${layoutIndex + 1}`}>
+      <div
+        className="overflow-x-auto"
+        tabIndex={0}
+        role="region"
+        aria-label={`Cuts of layout ${layoutIndex + 1}`}
+      >
         <table className="mt-1 w-full max-w-3xl border-collapse">
           <thead>
             <tr className="border-b-2 border-ink text-left">

@@ -3,7 +3,11 @@ import type { BarMap, Fill, Shape, Tone } from '#shared/domain/bar-map/shapes.ts
 
 const INK = '#1d242b';
 const TONES: Readonly<Record<Tone, string>> = { ink: INK, cut: '#9f3d2b', faint: '#566069' };
-const FILLS: Readonly<Record<Exclude<Fill, 'none'>, string>> = { ink: INK, chalk: '#fffdf6', soap: '#e6e8e3' };
+const FILLS: Readonly<Record<Exclude<Fill, 'none'>, string>> = {
+  ink: INK,
+  chalk: '#fffdf6',
+  soap: '#e6e8e3',
+};
 const FONTS = { mono: '"JetBrains Mono", monospace', head: '"Barlow Condensed", sans-serif' } as const;
 const LAYOUT_BLUE = '#173a5e';
 
@@ -36,9 +40,15 @@ function paintShape(context: Context, shape: Shape, filled: number | null): void
       }
       return;
     case 'text':
-      context.setAttr('font', `${shape.bold ? (shape.font === 'head' ? 600 : 700) : 400} ${shape.size}px ${FONTS[shape.font]}`);
+      context.setAttr(
+        'font',
+        `${shape.bold ? (shape.font === 'head' ? 600 : 700) : 400} ${shape.size}px ${FONTS[shape.font]}`,
+      );
       context.setAttr('textAlign', shape.align);
-      context.setAttr('fillStyle', shape.piece !== undefined && shape.piece === filled ? '#fffdf6' : TONES[shape.tone]);
+      context.setAttr(
+        'fillStyle',
+        shape.piece !== undefined && shape.piece === filled ? '#fffdf6' : TONES[shape.tone],
+      );
       context.fillText(shape.text, shape.x, shape.y);
   }
 }

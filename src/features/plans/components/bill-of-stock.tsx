@@ -10,11 +10,24 @@ export function BillOfStock({ groups }: Pick<PlanView, 'groups'>) {
   const { length, mass, money } = useFormats();
   const bill = billOf(groups);
   const bought = bill.filter(({ source }) => source === 'new');
-  const stockOf = (line: BillLine) => groups.find(({ id }) => id === line.groupId)?.stock.find(({ stockId }) => stockId === line.stockId);
+  const stockOf = (line: BillLine) =>
+    groups.find(({ id }) => id === line.groupId)?.stock.find(({ stockId }) => stockId === line.stockId);
   const columns: Column<BillLine>[] = [
-    { key: 'section', head: 'Section', mono: true, rowHead: true, fullLine: true, cell: ({ section, grade }) => `${section} ${grade}` },
+    {
+      key: 'section',
+      head: 'Section',
+      mono: true,
+      rowHead: true,
+      fullLine: true,
+      cell: ({ section, grade }) => `${section} ${grade}`,
+    },
     { key: 'length', head: 'Length', mono: true, align: 'right', cell: ({ lengthNm }) => length(lengthNm) },
-    { key: 'supplier', head: 'Supplier', wideOnly: true, cell: (line) => stockOf(line)?.supplierName ?? 'typed in' },
+    {
+      key: 'supplier',
+      head: 'Supplier',
+      wideOnly: true,
+      cell: (line) => stockOf(line)?.supplierName ?? 'typed in',
+    },
     { key: 'bars', head: 'Bars', mono: true, align: 'right', cell: ({ bars }) => bars },
     { key: 'mass', head: 'Mass', mono: true, align: 'right', cell: ({ massMg }) => mass(massMg) },
     { key: 'cost', head: 'Cost', mono: true, align: 'right', cell: ({ costMinor }) => money(costMinor) },
@@ -37,7 +50,12 @@ export function BillOfStock({ groups }: Pick<PlanView, 'groups'>) {
           columns={columns}
           rows={bought}
           rowKey={({ groupId, stockId }) => `${groupId}${stockId}`}
-          foot={{ section: 'Together', bars: sum(({ bars }) => bars), mass: mass(sum(({ massMg }) => massMg)), cost: money(sum(({ costMinor }) => costMinor)) }}
+          foot={{
+            section: 'Together',
+            bars: sum(({ bars }) => bars),
+            mass: mass(sum(({ massMg }) => massMg)),
+            cost: money(sum(({ costMinor }) => costMinor)),
+          }}
         />
       )}
       <h2 className="mt-8 mb-2">Drops to pull</h2>
@@ -55,14 +73,28 @@ export function BillOfStock({ groups }: Pick<PlanView, 'groups'>) {
               mono: true,
               rowHead: true,
               cell: ({ drop }) => (
-                <Link to={paths.drop(drop.id)} className="font-bold text-layout underline-offset-4 hover:underline">
+                <Link
+                  to={paths.drop(drop.id)}
+                  className="font-bold text-layout underline-offset-4 hover:underline"
+                >
                   {formatTag(drop.tag)}
                 </Link>
               ),
             },
             { key: 'slot', head: 'Slot', mono: true, cell: ({ drop }) => drop.slot },
-            { key: 'section', head: 'Section', mono: true, cell: ({ group }) => `${group.section} ${group.grade}` },
-            { key: 'length', head: 'Length', mono: true, align: 'right', cell: ({ stock }) => length(stock.lengthNm) },
+            {
+              key: 'section',
+              head: 'Section',
+              mono: true,
+              cell: ({ group }) => `${group.section} ${group.grade}`,
+            },
+            {
+              key: 'length',
+              head: 'Length',
+              mono: true,
+              align: 'right',
+              cell: ({ stock }) => length(stock.lengthNm),
+            },
             { key: 'heat', head: 'Heat', mono: true, cell: ({ drop }) => formatHeat(drop.heat) },
           ]}
         />

@@ -2,7 +2,15 @@ import { Tape } from '#src/components/tape.tsx';
 import { useFormats } from '#src/lib/formats.ts';
 
 /** The two marks that close on each other: what the plan costs and what no plan can cost less than. */
-export function BoundTape({ netMinor, boundMinor, words }: { netMinor: number; boundMinor: number; words: string }) {
+export function BoundTape({
+  netMinor,
+  boundMinor,
+  words,
+}: {
+  netMinor: number;
+  boundMinor: number;
+  words: string;
+}) {
   const { money } = useFormats();
   // The tape shows the neighbourhood of the plan, so that a gap of a per cent can be seen at all.
   const span = Math.max(netMinor - boundMinor, netMinor * 0.004, 1);
@@ -17,8 +25,20 @@ export function BoundTape({ netMinor, boundMinor, words }: { netMinor: number; b
       minor={step}
       major={step * 10}
       marks={[
-        { key: 'bound', at: boundMinor, kind: 'bound', label: `no plan costs less than ${money(boundMinor)}`, side: 'left' },
-        { key: 'net', at: netMinor, kind: 'cut', label: `this plan ${money(netMinor)}, ${words}`, side: 'right' },
+        {
+          key: 'bound',
+          at: boundMinor,
+          kind: 'bound',
+          label: `no plan costs less than ${money(boundMinor)}`,
+          side: 'left',
+        },
+        {
+          key: 'net',
+          at: netMinor,
+          kind: 'cut',
+          label: `this plan ${money(netMinor)}, ${words}`,
+          side: 'right',
+        },
       ]}
     />
   );

@@ -14,7 +14,8 @@ type ChooseLinesProps = {
   busy: boolean;
 };
 
-const openOf = (lines: readonly PartLine[]) => lines.reduce((sum, { quantity, planned }) => sum + quantity - planned, 0);
+const openOf = (lines: readonly PartLine[]) =>
+  lines.reduce((sum, { quantity, planned }) => sum + quantity - planned, 0);
 
 /** Open lines by job, section and grade; a tick takes or leaves the whole group. */
 export function ChooseLines({ lines, jobNames, chosen, onChange, onNext, busy }: ChooseLinesProps) {
@@ -71,10 +72,18 @@ export function ChooseLines({ lines, jobNames, chosen, onChange, onNext, busy }:
             const id = `group-${jobId}-${first.id}`;
             const plate = PLATE_FAMILIES.includes(first.family);
             return (
-              <div key={id} className="grid grid-cols-[auto_minmax(0,1fr)_auto] items-center gap-x-3 border-b border-line py-2">
-                {plate ? <span className="w-5" /> : box(`${first.section} ${first.grade} of job ${first.jobNumber}`, members, id)}
+              <div
+                key={id}
+                className="grid grid-cols-[auto_minmax(0,1fr)_auto] items-center gap-x-3 border-b border-line py-2"
+              >
+                {plate ? (
+                  <span className="w-5" />
+                ) : (
+                  box(`${first.section} ${first.grade} of job ${first.jobNumber}`, members, id)
+                )}
                 <label htmlFor={plate ? undefined : id} className="min-w-0">
-                  <span className="font-mono font-bold">{first.section}</span> <span className="font-mono">{first.grade || 'no grade'}</span>
+                  <span className="font-mono font-bold">{first.section}</span>{' '}
+                  <span className="font-mono">{first.grade || 'no grade'}</span>
                   {plate && <span className="ml-2 text-muted">plate is planned by area, not by bar</span>}
                 </label>
                 <span className="text-right font-mono text-[0.9375rem] whitespace-nowrap">
@@ -89,7 +98,13 @@ export function ChooseLines({ lines, jobNames, chosen, onChange, onNext, busy }:
         <p role="status" className="font-mono">
           {countOf(taken.length, 'line', 'lines')}, {countOf(openOf(taken), 'piece', 'pieces')}
         </p>
-        <Button variant="act" disabled={taken.length === 0} busy={busy} busyLabel="Looking for stock" onClick={onNext}>
+        <Button
+          variant="act"
+          disabled={taken.length === 0}
+          busy={busy}
+          busyLabel="Looking for stock"
+          onClick={onNext}
+        >
           Look for stock
         </Button>
       </div>

@@ -10,7 +10,13 @@ import { SelectField } from '#src/components/select-field.tsx';
 import { countOf, formatHeat, formatTag, useFormats } from '#src/lib/formats.ts';
 
 type Group = PlanningView['groups'][number];
-type GroupCardProps = { group: Group; edits: GroupEdits; stations: readonly Station[]; stationId: number | null; onChange: (edits: GroupEdits, stationId?: number | null) => void };
+type GroupCardProps = {
+  group: Group;
+  edits: GroupEdits;
+  stations: readonly Station[];
+  stationId: number | null;
+  onChange: (edits: GroupEdits, stationId?: number | null) => void;
+};
 
 const check = 'size-5 shrink-0';
 
@@ -26,16 +32,25 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
   const massMg = group.pieces.reduce((sum, { quantity, pieceMassMg }) => sum + quantity * pieceMassMg, 0);
   const station = stations.find(({ id }) => id === stationId);
   return (
-    <section aria-label={`${group.section} ${group.grade}`} className="mb-5 border-[1.5px] border-ink bg-chalk">
+    <section
+      aria-label={`${group.section} ${group.grade}`}
+      className="mb-5 border-[1.5px] border-ink bg-chalk"
+    >
       <header className="flex flex-wrap items-baseline gap-x-4 gap-y-1 border-b border-line px-4 py-2.5">
         <h3 className="font-mono text-xl font-bold">
           {group.section} <span className="font-medium">{group.grade}</span>
         </h3>
         <p className="text-muted">
-          {countOf(pieces, 'piece', 'pieces')}, longest <span className="font-mono">{length(longest)}</span>, <span className="font-mono">{mass(massMg)}</span>
+          {countOf(pieces, 'piece', 'pieces')}, longest <span className="font-mono">{length(longest)}</span>,{' '}
+          <span className="font-mono">{mass(massMg)}</span>
         </p>
         <label className="ml-auto flex items-center gap-2">
-          <input type="checkbox" className={check} checked={!edits.leftOut} onChange={(event) => set({ leftOut: !event.target.checked })} />
+          <input
+            type="checkbox"
+            className={check}
+            checked={!edits.leftOut}
+            onChange={(event) => set({ leftOut: !event.target.checked })}
+          />
           plan it
         </label>
       </header>
@@ -52,7 +67,13 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
                       type="checkbox"
                       className={check}
                       checked={entry.used}
-                      onChange={(event) => set({ stock: edits.stock.map((other, j) => (i === j ? { ...other, used: event.target.checked } : other)) })}
+                      onChange={(event) =>
+                        set({
+                          stock: edits.stock.map((other, j) =>
+                            i === j ? { ...other, used: event.target.checked } : other,
+                          ),
+                        })
+                      }
                     />
                     <span className="min-w-0">
                       <span className="font-mono font-bold">{length(entry.lengthNm)}</span>{' '}
@@ -65,14 +86,20 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
                     className="w-32"
                     currency={currency}
                     value={entry.costMinor}
-                    onChange={(costMinor) => costMinor !== null && set({ stock: edits.stock.map((other, j) => (i === j ? { ...other, costMinor } : other)) })}
+                    onChange={(costMinor) =>
+                      costMinor !== null &&
+                      set({
+                        stock: edits.stock.map((other, j) => (i === j ? { ...other, costMinor } : other)),
+                      })
+                    }
                   />
                 </div>
               );
             })}
             {nothing && (
               <Notice tone="fault" className="mt-2">
-                No stock to cut from. Add a length with its price, or tick one; without it these pieces stay unplaced.
+                No stock to cut from. Add a length with its price, or tick one; without it these pieces stay
+                unplaced.
               </Notice>
             )}
             {tooShort && (
@@ -80,7 +107,11 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
                 The longest piece is longer than any length ticked. Add a longer one, or it stays unplaced.
               </Notice>
             )}
-            <AddLength group={group} edits={edits} onAdd={(entry) => set({ stock: [...edits.stock, entry] })} />
+            <AddLength
+              group={group}
+              edits={edits}
+              onAdd={(entry) => set({ stock: [...edits.stock, entry] })}
+            />
           </div>
           <div>
             <h4 className="font-head text-base font-semibold">Drops on the rack that fit</h4>
@@ -95,10 +126,17 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
                       type="checkbox"
                       className={check}
                       checked={entry.used}
-                      onChange={(event) => set({ drops: edits.drops.map((other, j) => (i === j ? { ...other, used: event.target.checked } : other)) })}
+                      onChange={(event) =>
+                        set({
+                          drops: edits.drops.map((other, j) =>
+                            i === j ? { ...other, used: event.target.checked } : other,
+                          ),
+                        })
+                      }
                     />
                     <span className="min-w-0 flex-1 font-mono text-[0.9375rem]">
-                      <b>{drop ? formatTag(drop.tag) : entry.stockId}</b> {length(entry.lengthNm)} · {drop?.slot} · {formatHeat(drop?.heat ?? null)}
+                      <b>{drop ? formatTag(drop.tag) : entry.stockId}</b> {length(entry.lengthNm)} ·{' '}
+                      {drop?.slot} · {formatHeat(drop?.heat ?? null)}
                     </span>
                     <span className="font-mono text-[0.9375rem]">{money(entry.costMinor)}</span>
                   </label>
@@ -108,7 +146,9 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
           </div>
           <details className="min-w-0">
             <summary className="font-head text-base font-semibold">
-              {station?.name ?? 'No station'}: {edits.cutting.kerfNm === 0 ? 'no kerf' : `kerf ${length(edits.cutting.kerfNm)}`}; keep drops from {length(edits.rule.keepFromNm)}
+              {station?.name ?? 'No station'}:{' '}
+              {edits.cutting.kerfNm === 0 ? 'no kerf' : `kerf ${length(edits.cutting.kerfNm)}`}; keep drops
+              from {length(edits.rule.keepFromNm)}
             </summary>
             <div className="mt-3 grid gap-3">
               <SelectField
@@ -119,7 +159,10 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
                 onChange={(event) => {
                   const next = stations.find(({ id }) => String(id) === event.target.value);
                   const { kerfNm, headCropNm, tailCropNm, holdDownNm } = next ?? edits.cutting;
-                  onChange({ ...edits, cutting: { kerfNm, headCropNm, tailCropNm, holdDownNm } }, next?.id ?? null);
+                  onChange(
+                    { ...edits, cutting: { kerfNm, headCropNm, tailCropNm, holdDownNm } },
+                    next?.id ?? null,
+                  );
                 }}
               />
               {(
@@ -139,18 +182,27 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
                   onChange={(nm) => nm !== null && set({ cutting: { ...edits.cutting, [key]: nm } })}
                 />
               ))}
-              <LengthField label="Keep drops from" lengthStyle={lengthStyle} value={edits.rule.keepFromNm} onChange={(nm) => nm !== null && set({ rule: { ...edits.rule, keepFromNm: nm } })} />
+              <LengthField
+                label="Keep drops from"
+                lengthStyle={lengthStyle}
+                value={edits.rule.keepFromNm}
+                onChange={(nm) => nm !== null && set({ rule: { ...edits.rule, keepFromNm: nm } })}
+              />
               <MoneyField
                 label="A kept drop is worth, a metre"
                 currency={currency}
                 value={edits.rule.creditMinorPerM}
-                onChange={(minor) => minor !== null && set({ rule: { ...edits.rule, creditMinorPerM: minor } })}
+                onChange={(minor) =>
+                  minor !== null && set({ rule: { ...edits.rule, creditMinorPerM: minor } })
+                }
               />
               <MoneyField
                 label="Scrap is worth, a metre"
                 currency={currency}
                 value={edits.rule.scrapMinorPerM}
-                onChange={(minor) => minor !== null && set({ rule: { ...edits.rule, scrapMinorPerM: minor } })}
+                onChange={(minor) =>
+                  minor !== null && set({ rule: { ...edits.rule, scrapMinorPerM: minor } })
+                }
               />
             </div>
           </details>
@@ -160,7 +212,11 @@ export function GroupCard({ group, edits, stations, stationId, onChange }: Group
   );
 }
 
-type AddLengthProps = { group: Group; edits: GroupEdits; onAdd: (entry: GroupEdits['stock'][number]) => void };
+type AddLengthProps = {
+  group: Group;
+  edits: GroupEdits;
+  onAdd: (entry: GroupEdits['stock'][number]) => void;
+};
 
 /** A length nobody has offered yet, with the price the planner expects. */
 function AddLength({ group, edits, onAdd }: AddLengthProps) {
@@ -176,8 +232,24 @@ function AddLength({ group, edits, onAdd }: AddLengthProps) {
     );
   return (
     <div className="mt-2 flex flex-wrap items-end gap-3">
-      <LengthField label="Length" className="w-36" lengthStyle={lengthStyle} value={lengthNm} onChange={setLengthNm} hint={`Usual: ${group.usualLengthsNm.slice(0, 4).map((nm) => length(nm)).join(', ')}`} />
-      <MoneyField label="Price a bar" className="w-32" currency={currency} value={costMinor} onChange={setCostMinor} />
+      <LengthField
+        label="Length"
+        className="w-36"
+        lengthStyle={lengthStyle}
+        value={lengthNm}
+        onChange={setLengthNm}
+        hint={`Usual: ${group.usualLengthsNm
+          .slice(0, 4)
+          .map((nm) => length(nm))
+          .join(', ')}`}
+      />
+      <MoneyField
+        label="Price a bar"
+        className="w-32"
+        currency={currency}
+        value={costMinor}
+        onChange={setCostMinor}
+      />
       <Button
         size="small"
         disabled={lengthNm === null || costMinor === null || costMinor === 0}

@@ -26,24 +26,67 @@ export function GroupTable({ groups }: { groups: readonly PlanGroup[] }) {
             </a>
           ),
         },
-        { key: 'pieces', head: 'Pieces', align: 'right', mono: true, cell: ({ pieces }) => pieces.reduce((sum, { quantity }) => sum + quantity, 0) },
+        {
+          key: 'pieces',
+          head: 'Pieces',
+          align: 'right',
+          mono: true,
+          cell: ({ pieces }) => pieces.reduce((sum, { quantity }) => sum + quantity, 0),
+        },
         {
           key: 'stock',
           head: 'Stock',
           mono: true,
           wideOnly: true,
           cell: ({ stock, result }) =>
-            [...new Set(stock.filter(({ source, stockId }) => source === 'new' && result.layouts.some((layout) => layout.stockId === stockId)).map(({ lengthNm }) => length(lengthNm)))].join(', '),
+            [
+              ...new Set(
+                stock
+                  .filter(
+                    ({ source, stockId }) =>
+                      source === 'new' && result.layouts.some((layout) => layout.stockId === stockId),
+                  )
+                  .map(({ lengthNm }) => length(lengthNm)),
+              ),
+            ].join(', '),
         },
-        { key: 'bars', head: 'Bars', align: 'right', mono: true, cell: ({ result }) => result.counts.newBars },
-        { key: 'used', head: 'Drops used', align: 'right', mono: true, cell: ({ result }) => result.counts.dropsUsed },
-        { key: 'made', head: 'New drops', align: 'right', mono: true, cell: ({ result }) => result.layouts.filter(({ keeps }) => keeps).reduce((sum, { repeat }) => sum + repeat, 0) },
-        { key: 'net', head: 'Net cost', align: 'right', mono: true, cell: ({ result }) => money(result.netCostMinor) },
+        {
+          key: 'bars',
+          head: 'Bars',
+          align: 'right',
+          mono: true,
+          cell: ({ result }) => result.counts.newBars,
+        },
+        {
+          key: 'used',
+          head: 'Drops used',
+          align: 'right',
+          mono: true,
+          cell: ({ result }) => result.counts.dropsUsed,
+        },
+        {
+          key: 'made',
+          head: 'New drops',
+          align: 'right',
+          mono: true,
+          cell: ({ result }) =>
+            result.layouts.filter(({ keeps }) => keeps).reduce((sum, { repeat }) => sum + repeat, 0),
+        },
+        {
+          key: 'net',
+          head: 'Net cost',
+          align: 'right',
+          mono: true,
+          cell: ({ result }) => money(result.netCostMinor),
+        },
         {
           key: 'bound',
           head: 'Against the bound',
           fullLine: true,
-          cell: ({ result }) => (result.outcome === 'unplaceable' ? 'some pieces are not placed' : boundWords(result.outcome, result.netCostMinor, result.boundMinor)),
+          cell: ({ result }) =>
+            result.outcome === 'unplaceable'
+              ? 'some pieces are not placed'
+              : boundWords(result.outcome, result.netCostMinor, result.boundMinor),
         },
       ]}
     />

@@ -19,7 +19,12 @@ import { ApiError, faultWords } from '#src/lib/api-error.ts';
 import { countOf } from '#src/lib/formats.ts';
 import { paths } from '#src/lib/paths.ts';
 
-type NewPlanProps = { lines: readonly PartLine[]; jobNames: ReadonlyMap<number, string>; chosenAtFirst: ReadonlySet<number>; stations: readonly Station[] };
+type NewPlanProps = {
+  lines: readonly PartLine[];
+  jobNames: ReadonlyMap<number, string>;
+  chosenAtFirst: ReadonlySet<number>;
+  stations: readonly Station[];
+};
 
 const LIMITS = [
   { value: '5000', label: '5 seconds a section' },
@@ -29,7 +34,13 @@ const LIMITS = [
 
 function planName(lines: readonly PartLine[], jobNames: ReadonlyMap<number, string>): string {
   const jobs = [...new Set(lines.map(({ jobId }) => jobId))];
-  return jobs.map((id) => jobNames.get(id) ?? '').filter(Boolean).join(', ').slice(0, 80) || 'Cut plan';
+  return (
+    jobs
+      .map((id) => jobNames.get(id) ?? '')
+      .filter(Boolean)
+      .join(', ')
+      .slice(0, 80) || 'Cut plan'
+  );
 }
 
 /** Three steps on one page: what is to be cut, from which stock, and how well. A step back loses nothing. */
@@ -53,9 +64,23 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
       const answer = await askPlanning([...chosen]);
       setView(answer);
       // What was ticked before stays as it was; new groups come with everything ticked.
-      setEdits((before) => ({ ...defaultEdits(answer), ...Object.fromEntries(Object.entries(before).filter(([id]) => answer.groups.some((group) => group.id === id))) }));
-      setStationIds((before) => Object.fromEntries(answer.groups.map(({ id, stationId }) => [id, before[id] ?? stationId])));
-      setName((before) => before || planName(lines.filter(({ id }) => chosen.has(id)), jobNames));
+      setEdits((before) => ({
+        ...defaultEdits(answer),
+        ...Object.fromEntries(
+          Object.entries(before).filter(([id]) => answer.groups.some((group) => group.id === id)),
+        ),
+      }));
+      setStationIds((before) =>
+        Object.fromEntries(answer.groups.map(({ id, stationId }) => [id, before[id] ?? stationId])),
+      );
+      setName(
+        (before) =>
+          before ||
+          planName(
+            lines.filter(({ id }) => chosen.has(id)),
+            jobNames,
+          ),
+      );
       reset();
     } catch (error) {
       setFault(error);
@@ -70,7 +95,12 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
     setFault(null);
     try {
       const used = [...new Set(run.request.groups.map(({ id }) => stationIds[id] ?? null))];
-      const saved = await writes.save({ name: name.trim() || 'Cut plan', stationId: used.length === 1 ? (used[0] ?? null) : null, request: run.request, result: run.result });
+      const saved = await writes.save({
+        name: name.trim() || 'Cut plan',
+        stationId: used.length === 1 ? (used[0] ?? null) : null,
+        request: run.request,
+        result: run.result,
+      });
       await navigate(paths.plan(saved.plan.id));
     } catch (error) {
       setFault(error);
@@ -98,24 +128,46 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
     return (
       <>
         {faultNotice}
-        <ChooseLines lines={lines} jobNames={jobNames} chosen={chosen} onChange={setChosen} onNext={() => void lookForStock()} busy={busy} />
+        <ChooseLines
+          lines={lines}
+          jobNames={jobNames}
+          chosen={chosen}
+          onChange={setChosen}
+          onNext={() => void lookForStock()}
+          busy={busy}
+        />
       </>
     );
 
   const request = planRequest(view, edits, { seed: 1, timeLimitMs: Number(limit) });
   const makers = findMoneyMakers(request);
   if (run.state === 'running' || run.state === 'done') {
-    const outcomes = run.state === 'done' ? new Map(run.result.groups.map(({ id, outcome }) => [id, outcome])) : undefined;
-    const unplaced = run.state === 'done' ? run.result.groups.flatMap((group) => group.unplaced).reduce((sum, { quantity }) => sum + quantity, 0) : 0;
+    const outcomes =
+      run.state === 'done' ? new Map(run.result.groups.map(({ id, outcome }) => [id, outcome])) : undefined;
+    const unplaced =
+      run.state === 'done'
+        ? run.result.groups
+            .flatMap((group) => group.unplaced)
+            .reduce((sum, { quantity }) => sum + quantity, 0)
+        : 0;
     return (
       <section aria-labelledby="solving">
         <h2 id="solving" className="mt-2 mb-4">
           {run.state === 'running' ? `Planning, ${run.done} of ${run.of} done` : 'How good is it'}
         </h2>
-        <SolveBoard groups={run.state === 'done' ? run.request.groups : request.groups} progress={run.progress} {...(outcomes ? { outcomes } : {})} />
+        <SolveBoard
+          groups={run.state === 'done' ? run.request.groups : request.groups}
+          progress={run.progress}
+          {...(outcomes ? { outcomes } : {})}
+        />
         {unplaced > 0 && (
-          <Notice tone="fault" className="mt-4" title={`${countOf(unplaced, 'piece is', 'pieces are')} not placed`}>
-            They are longer than any stock ticked, or the stock runs out. Go back and add a longer length, or save the plan without them: they stay open.
+          <Notice
+            tone="fault"
+            className="mt-4"
+            title={`${countOf(unplaced, 'piece is', 'pieces are')} not placed`}
+          >
+            They are longer than any stock ticked, or the stock runs out. Go back and add a longer length, or
+            save the plan without them: they stay open.
           </Notice>
         )}
         {faultNotice}
@@ -125,7 +177,13 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
           </Button>
         ) : (
           <div className="mt-6 flex flex-wrap items-end gap-4">
-            <TextField label="Name of the plan" className="w-full max-w-md" maxLength={80} value={name} onChange={(event) => setName(event.target.value)} />
+            <TextField
+              label="Name of the plan"
+              className="w-full max-w-md"
+              maxLength={80}
+              value={name}
+              onChange={(event) => setName(event.target.value)}
+            />
             <Button variant="act" busy={busy} busyLabel="Checking and saving" onClick={() => void save()}>
               Save as draft
             </Button>
@@ -149,7 +207,13 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
       {faultNotice}
       {view.left.length > 0 && (
         <Notice className="mb-4" title={`${countOf(view.left.length, 'line is', 'lines are')} left out`}>
-          {[...new Set(view.left.map(({ reason }) => reason))].join(' ')} Marks: <span className="font-mono">{view.left.slice(0, 12).map(({ mark }) => mark).join(', ')}</span>
+          {[...new Set(view.left.map(({ reason }) => reason))].join(' ')} Marks:{' '}
+          <span className="font-mono">
+            {view.left
+              .slice(0, 12)
+              .map(({ mark }) => mark)
+              .join(', ')}
+          </span>
         </Notice>
       )}
       {view.groups.map((group) => {
@@ -174,8 +238,18 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
         </Notice>
       )}
       <div className="sticky bottom-0 -mx-1 flex flex-wrap items-end gap-4 border-t-2 border-ink bg-paper px-1 py-3 max-md:bottom-16">
-        <SelectField label="Look for at most" className="w-56" choices={LIMITS} value={limit} onChange={(event) => setLimit(event.target.value)} />
-        <Button variant="act" disabled={request.groups.length === 0 || makers.length > 0} onClick={() => void start(request)}>
+        <SelectField
+          label="Look for at most"
+          className="w-56"
+          choices={LIMITS}
+          value={limit}
+          onChange={(event) => setLimit(event.target.value)}
+        />
+        <Button
+          variant="act"
+          disabled={request.groups.length === 0 || makers.length > 0}
+          onClick={() => void start(request)}
+        >
           Plan the cuts
         </Button>
         <Button onClick={() => setView(null)}>Back to the lines</Button>

@@ -50,11 +50,17 @@ export function PlanActions({ view, stations }: { view: PlanView; stations: read
   return (
     <>
       <LinkButton to={paths.planPrint(plan.id)}>Print bar maps</LinkButton>
-      <Button busy={busy && asking === null} busyLabel="Writing the file" onClick={() => void go(() => downloadPlanWorkbook(view, shop), 'The workbook is written.')}>
+      <Button
+        busy={busy && asking === null}
+        busyLabel="Writing the file"
+        onClick={() => void go(() => downloadPlanWorkbook(view, shop), 'The workbook is written.')}
+      >
         Spreadsheet
       </Button>
       {plan.can['bar:cut'] && <LinkButton to={paths.benchPlan(plan.id)}>To the bench</LinkButton>}
-      {plan.can['plan:withdraw'] && plan.state === 'issued' && <Button onClick={() => ask('withdraw')}>Withdraw</Button>}
+      {plan.can['plan:withdraw'] && plan.state === 'issued' && (
+        <Button onClick={() => ask('withdraw')}>Withdraw</Button>
+      )}
       {plan.can['plan:remove'] && <Button onClick={() => ask('remove')}>Delete draft</Button>}
       {plan.can['plan:issue'] && (
         <Button variant="act" onClick={() => ask('issue')}>
@@ -66,13 +72,25 @@ export function PlanActions({ view, stations }: { view: PlanView; stations: read
         open={asking === 'issue'}
         title={`Issue plan ${plan.number}`}
         confirmLabel="Issue"
-        onConfirm={() => void go(() => writes.issue(plan.id, { stationId: Number(station), version: plan.version }), `Plan ${plan.number} is issued.`)}
+        onConfirm={() =>
+          void go(
+            () => writes.issue(plan.id, { stationId: Number(station), version: plan.version }),
+            `Plan ${plan.number} is issued.`,
+          )
+        }
       >
         <p className="mb-3">
-          {plan.dropsUsed === 0 ? 'No drop is used.' : `${countOf(plan.dropsUsed, 'drop is', 'drops are')} held for it, all or none.`} The station can cut
-          from then on.
+          {plan.dropsUsed === 0
+            ? 'No drop is used.'
+            : `${countOf(plan.dropsUsed, 'drop is', 'drops are')} held for it, all or none.`}{' '}
+          The station can cut from then on.
         </p>
-        <SelectField label="Station" value={station} onChange={(event) => setStation(event.target.value)} choices={stations.map(({ id, name }) => ({ value: String(id), label: name }))} />
+        <SelectField
+          label="Station"
+          value={station}
+          onChange={(event) => setStation(event.target.value)}
+          choices={stations.map(({ id, name }) => ({ value: String(id), label: name }))}
+        />
       </ConfirmDialog>
       <ConfirmDialog
         {...dialog}
@@ -80,10 +98,20 @@ export function PlanActions({ view, stations }: { view: PlanView; stations: read
         title={`Withdraw plan ${plan.number}`}
         confirmLabel="Withdraw"
         tone="danger"
-        onConfirm={() => void go(() => writes.withdraw(plan.id, { reason, version: plan.version }), `Plan ${plan.number} is withdrawn.`)}
+        onConfirm={() =>
+          void go(
+            () => writes.withdraw(plan.id, { reason, version: plan.version }),
+            `Plan ${plan.number} is withdrawn.`,
+          )
+        }
       >
         <p className="mb-3">Held drops go back to the rack and the pieces are open again.</p>
-        <TextField label="Why" maxLength={200} value={reason} onChange={(event) => setReason(event.target.value)} />
+        <TextField
+          label="Why"
+          maxLength={200}
+          value={reason}
+          onChange={(event) => setReason(event.target.value)}
+        />
       </ConfirmDialog>
       <ConfirmDialog
         {...dialog}

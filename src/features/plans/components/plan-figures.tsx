@@ -12,7 +12,9 @@ export function PlanFigures({ view }: { view: PlanView }) {
   const masses = massesOf(groups);
   const net = groups.reduce((sum, { result }) => sum + result.netCostMinor, 0);
   const bound = groups.reduce((sum, { result }) => sum + result.boundMinor, 0);
-  const buy = billOf(groups).filter(({ source }) => source === 'new').reduce((sum, { costMinor }) => sum + costMinor, 0);
+  const buy = billOf(groups)
+    .filter(({ source }) => source === 'new')
+    .reduce((sum, { costMinor }) => sum + costMinor, 0);
   const share = (part: number) => (masses.stock > 0 ? `${((100 * part) / masses.stock).toFixed(1)} %` : '–');
   return (
     <>
@@ -20,10 +22,22 @@ export function PlanFigures({ view }: { view: PlanView }) {
         <Figure value={money(net)} label="net cost, drops credited" />
         <Figure value={money(buy)} label="to buy" note={mass(masses.bought)} />
         <Figure value={plan.newBars} label="bars to buy" />
-        <Figure value={plan.dropsUsed} label="drops used" note={plan.dropsUsed > 0 ? mass(masses.fromRack) : undefined} />
-        <Figure value={masses.yield === null ? '–' : `${(100 * masses.yield).toFixed(1)} %`} label="yield: becomes pieces" note={mass(masses.pieces)} />
+        <Figure
+          value={plan.dropsUsed}
+          label="drops used"
+          note={plan.dropsUsed > 0 ? mass(masses.fromRack) : undefined}
+        />
+        <Figure
+          value={masses.yield === null ? '–' : `${(100 * masses.yield).toFixed(1)} %`}
+          label="yield: becomes pieces"
+          note={mass(masses.pieces)}
+        />
         <Figure value={share(masses.drops)} label="kept as drops" note={mass(masses.drops)} />
-        <Figure value={share(masses.scrap + masses.crops + masses.kerf)} label="scrap, crops and kerf" note={mass(masses.scrap + masses.crops + masses.kerf)} />
+        <Figure
+          value={share(masses.scrap + masses.crops + masses.kerf)}
+          label="scrap, crops and kerf"
+          note={mass(masses.scrap + masses.crops + masses.kerf)}
+        />
       </FigureRow>
       {net > 0 && (
         <>

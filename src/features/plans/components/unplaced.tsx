@@ -6,12 +6,20 @@ import { countOf, useFormats } from '#src/lib/formats.ts';
 export function Unplaced({ groups }: { groups: readonly PlanGroup[] }) {
   const { length } = useFormats();
   const missing = groups.flatMap((group) =>
-    group.result.unplaced.map((entry) => ({ ...entry, group, piece: group.pieces.find(({ id }) => id === entry.pieceId) })),
+    group.result.unplaced.map((entry) => ({
+      ...entry,
+      group,
+      piece: group.pieces.find(({ id }) => id === entry.pieceId),
+    })),
   );
   if (missing.length === 0) return null;
   const pieces = missing.reduce((sum, { quantity }) => sum + quantity, 0);
   return (
-    <Notice tone="fault" className="mb-6" title={`${countOf(pieces, 'piece is', 'pieces are')} not in this plan`}>
+    <Notice
+      tone="fault"
+      className="mb-6"
+      title={`${countOf(pieces, 'piece is', 'pieces are')} not in this plan`}
+    >
       <ul className="list-disc pl-5">
         {missing.map(({ pieceId, quantity, reason, group, piece }) => (
           <li key={`${group.id}${pieceId}`}>

@@ -9,10 +9,16 @@ describe('how good a plan says it is', () => {
   });
   it('never rounds in the plan’s favour', () => {
     fc.assert(
-      fc.property(fc.integer({ min: 1000, max: 1e9 }), fc.double({ min: 0, max: 0.5, noNaN: true }), (net, gap) => {
-        const bound = net * (1 - gap);
-        expect(Number.parseFloat(gapPercent(net, bound)) + 1e-3).toBeGreaterThanOrEqual((100 * (net - bound)) / net - 1e-4);
-      }),
+      fc.property(
+        fc.integer({ min: 1000, max: 1e9 }),
+        fc.double({ min: 0, max: 0.5, noNaN: true }),
+        (net, gap) => {
+          const bound = net * (1 - gap);
+          expect(Number.parseFloat(gapPercent(net, bound)) + 1e-3).toBeGreaterThanOrEqual(
+            (100 * (net - bound)) / net - 1e-4,
+          );
+        },
+      ),
     );
   });
 });

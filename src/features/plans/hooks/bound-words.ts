@@ -10,6 +10,7 @@ export function gapPercent(netMinor: number, boundMinor: number): string {
 
 /** What a plan may honestly say of itself. */
 export function boundWords(outcome: SolveOutcome, netMinor: number, boundMinor: number): string {
-  if (outcome === 'proven' || netMinor - boundMinor < 1e-6 * Math.max(1, netMinor)) return 'least possible, proven';
+  if (outcome === 'proven' || netMinor - boundMinor < 1e-6 * Math.max(1, netMinor))
+    return 'least possible, proven';
   return `within ${gapPercent(netMinor, boundMinor)} of the least possible`;
 }

@@ -14,15 +14,27 @@ export const SHEET_HEAD = 15;
 export const SHEET_FOOT = 15;
 
 /** Cuts of one mark and length that follow each other: one stop setting, several tape readings. */
-export type CutRun = { readonly first: number; readonly count: number; readonly pieceId: string; readonly lengthNm: number; readonly tapesNm: readonly number[] };
+export type CutRun = {
+  readonly first: number;
+  readonly count: number;
+  readonly pieceId: string;
+  readonly lengthNm: number;
+  readonly tapesNm: readonly number[];
+};
 
-export type BarBlock = { readonly group: PlanGroup; readonly layout: number; readonly map: BarMap; readonly runs: readonly CutRun[]; readonly height: number };
+export type BarBlock = {
+  readonly group: PlanGroup;
+  readonly layout: number;
+  readonly map: BarMap;
+  readonly runs: readonly CutRun[];
+  readonly height: number;
+};
 
 const BLOCK_HEAD = 17;
 const TABLE_HEAD = 6;
 const RUN_LINE = 5.2;
 const TAPES_A_LINE = 5;
-const BLOCK_FOOT = 13;
+const BLOCK_FOOT = 9;
 
 export function cutRuns(cuts: PlanGroup['result']['layouts'][number]['cuts']): CutRun[] {
   const runs: (CutRun & { tapesNm: number[]; count: number })[] = [];
@@ -42,7 +54,11 @@ export const runLines = (run: CutRun): number => Math.ceil(run.count / TAPES_A_L
 export const BOXES_A_LINE = 10;
 export const boxLines = (repeat: number): number => Math.ceil(repeat / BOXES_A_LINE);
 
-export function makeBlocks(groups: readonly PlanGroup[], width: number, draw: (group: PlanGroup, layout: number) => BarDrawing | null): BarBlock[] {
+export function makeBlocks(
+  groups: readonly PlanGroup[],
+  width: number,
+  draw: (group: PlanGroup, layout: number) => BarDrawing | null,
+): BarBlock[] {
   return groups.flatMap((group) =>
     group.result.layouts.flatMap(({ cuts, repeat }, layout): BarBlock[] => {
       const drawing = draw(group, layout);
@@ -50,7 +66,15 @@ export function makeBlocks(groups: readonly PlanGroup[], width: number, draw: (g
       const map = drawBar(drawing, width);
       const runs = cutRuns(cuts);
       const lines = runs.reduce((sum, run) => sum + runLines(run), 0);
-      return [{ group, layout, map, runs, height: BLOCK_HEAD + 6 * boxLines(repeat) + map.height + TABLE_HEAD + lines * RUN_LINE + BLOCK_FOOT }];
+      return [
+        {
+          group,
+          layout,
+          map,
+          runs,
+          height: BLOCK_HEAD + 6 * boxLines(repeat) + map.height + TABLE_HEAD + lines * RUN_LINE + BLOCK_FOOT,
+        },
+      ];
     }),
   );
 }

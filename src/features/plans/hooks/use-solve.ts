@@ -5,8 +5,18 @@ import { createSolverPool, type SolverPool } from '#src/lib/solver-client.ts';
 
 export type SolveRun =
   | { readonly state: 'idle' }
-  | { readonly state: 'running'; readonly progress: ReadonlyMap<string, SolveProgress>; readonly done: number; readonly of: number }
-  | { readonly state: 'done'; readonly request: SolveRequest; readonly result: SolveResult; readonly progress: ReadonlyMap<string, SolveProgress> }
+  | {
+      readonly state: 'running';
+      readonly progress: ReadonlyMap<string, SolveProgress>;
+      readonly done: number;
+      readonly of: number;
+    }
+  | {
+      readonly state: 'done';
+      readonly request: SolveRequest;
+      readonly result: SolveResult;
+      readonly progress: ReadonlyMap<string, SolveProgress>;
+    }
   | { readonly state: 'failed'; readonly message: string };
 
 /** Runs a request over the pool, groups side by side, and keeps what each tells on the way. Cancel ends the workers at once. */
@@ -31,7 +41,8 @@ export function useSolve() {
     const progress = new Map<string, SolveProgress>();
     let done = 0;
     const show = () => {
-      if (!controller.signal.aborted) setRun({ state: 'running', progress: new Map(progress), done, of: request.groups.length });
+      if (!controller.signal.aborted)
+        setRun({ state: 'running', progress: new Map(progress), done, of: request.groups.length });
     };
     show();
     const options = { seed: request.seed, timeLimitMs: request.timeLimitMs };
@@ -46,7 +57,14 @@ export function useSolve() {
             },
           });
           done++;
-          progress.set(group.id, { groupId: group.id, phase: 'done', netCostMinor: result.netCostMinor, boundMinor: result.boundMinor, bars: result.counts.bars, elapsedMs: result.work.elapsedMs });
+          progress.set(group.id, {
+            groupId: group.id,
+            phase: 'done',
+            netCostMinor: result.netCostMinor,
+            boundMinor: result.boundMinor,
+            bars: result.counts.bars,
+            elapsedMs: result.work.elapsedMs,
+          });
           show();
           return result;
         }),
