@@ -112,7 +112,7 @@ describe('the main job', () => {
       page.getByRole('button', { name: 'Spreadsheet' }).click(),
     ]);
     const book = new exceljs.Workbook();
-    await book.xlsx.load(readFileSync(await download.path()).buffer as ArrayBuffer);
+    await book.xlsx.load(readFileSync(await download.path()).buffer);
     expect(book.worksheets.map(({ name }) => name)).toEqual(['Bars', 'Cuts', 'Bill', 'Drops']);
     expect(typeof book.getWorksheet('Bars')?.getCell('H2').value).toBe('number');
 

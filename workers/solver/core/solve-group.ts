@@ -210,7 +210,7 @@ function search(problem: Problem, options: SolveOptions, hooks: SolveHooks, cloc
     const cutoff = incumbent.cost - Math.max(step * 0.5, 1e-6);
     const answer = solveInteger(hooks.highs, problem, all.columns, cutoff, part.secondsLeft());
     if (answer.uses) offer(answer.uses, 'proof');
-    raise(answer.complete && plan ? (plan as Plan).cost : Math.min(answer.bound, incumbent.cost));
+    raise(answer.complete && plan ? plan.cost : Math.min(answer.bound, incumbent.cost));
     tell('proof');
   }
 }

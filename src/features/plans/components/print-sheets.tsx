@@ -259,7 +259,7 @@ function Block({ block, bars, shop, formats, drawing }: BlockProps) {
         ) : layout.keeps ? (
           <>
             <b>Keep {length(layout.leftoverNm)}</b> as a drop, tag{' '}
-            {own.length === 1 && own[0]?.makesTag != null ? (
+            {own.length === 1 && typeof own[0]?.makesTag === 'number' ? (
               <b>{formatTag(own[0].makesTag)}</b>
             ) : own.length > 1 ? (
               'as ticked above'

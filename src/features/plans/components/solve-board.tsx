@@ -55,7 +55,7 @@ export function SolveBoard({ groups, progress, outcomes }: SolveBoardProps) {
                   </th>
                   <td className="py-1.5 pr-4 text-right font-mono">{entry?.bars ?? '–'}</td>
                   <td className="py-1.5 pr-4 text-right font-mono whitespace-nowrap">
-                    {entry?.netCostMinor == null ? '–' : money(entry.netCostMinor)}
+                    {typeof entry?.netCostMinor !== 'number' ? '–' : money(entry.netCostMinor)}
                   </td>
                   <td className="py-1.5 pr-4">
                     {!entry

@@ -209,7 +209,7 @@ export function fillPlanWorkbook(
           const bar = made[k];
           return [
             'to make',
-            bar?.makesTag == null ? '' : formatTag(bar.makesTag),
+            typeof bar?.makesTag !== 'number' ? '' : formatTag(bar.makesTag),
             group.section,
             group.grade,
             length(layout.leftoverNm),
