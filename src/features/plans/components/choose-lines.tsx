@@ -94,7 +94,7 @@ export function ChooseLines({ lines, jobNames, chosen, onChange, onNext, busy }:
           })}
         </fieldset>
       ))}
-      <div className="sticky bottom-0 -mx-1 flex flex-wrap items-center gap-4 border-t-2 border-ink bg-paper px-1 py-3 max-md:bottom-16">
+      <div className="-mx-1 md:sticky md:bottom-0 flex flex-wrap items-center gap-4 border-t-2 border-ink bg-paper px-1 py-3">
         <p role="status" className="font-mono">
           {countOf(taken.length, 'line', 'lines')}, {countOf(openOf(taken), 'piece', 'pieces')}
         </p>

@@ -237,7 +237,7 @@ export function NewPlan({ lines, jobNames, chosenAtFirst, stations }: NewPlanPro
           {makers.map(({ message }) => message).join('. ')}.
         </Notice>
       )}
-      <div className="sticky bottom-0 -mx-1 flex flex-wrap items-end gap-4 border-t-2 border-ink bg-paper px-1 py-3 max-md:bottom-16">
+      <div className="-mx-1 md:sticky md:bottom-0 flex flex-wrap items-end gap-4 border-t-2 border-ink bg-paper px-1 py-3">
         <SelectField
           label="Look for at most"
           className="w-56"
